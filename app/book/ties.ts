@@ -21,7 +21,9 @@ export function resolveTie(
   const sign = lap.reversed ? -1 : 1
   const wanted = rule.metres + rule.lengths * lap.carLength
   const edge = edgeOf(placement, lap)
-  const fromStart = { start: 0, middle: edge.length / 2, end: edge.length, block: blockStart(rule.block, placement) }[rule.from]
+  const fromStart = { start: 0, middle: edge.length / 2, end: edge.length, block: blockStart(rule.block, placement) }[
+    rule.from
+  ]
   const alongEdge = fromStart + wanted
   const along = edge.first + sign * roadFromEdge(alongEdge, edge)
   return { along: wrap(along, lap.length), across: place.across }
