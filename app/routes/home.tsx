@@ -1,0 +1,9 @@
+export const meta = () => [{ title: 'Turnstone' }]
+
+export default function Home() {
+  return (
+    <main>
+      <h1 className="h1">Turnstone</h1>
+    </main>
+  )
+}

@@ -1,0 +1,64 @@
+import { createRequestHandler } from '@react-router/express'
+import compression from 'compression'
+import express, { type Response } from 'express'
+import { RouterContextProvider, type ServerBuild } from 'react-router'
+import { ping, pool } from '~/db/client.server'
+import { env } from '~/env.server'
+import { listen } from '~/listen.server'
+import { log } from '~/log.server'
+import { limitBody } from '~/middleware/body-limit.server'
+import { clientAddressContext, nonceContext, reportPatternContext, requestIdContext } from '~/middleware/context'
+import { lastResort } from '~/middleware/last-resort.server'
+import { requestId } from '~/middleware/request-id.server'
+import { requestLog } from '~/middleware/request-log.server'
+import { sameOrigin } from '~/middleware/same-origin.server'
+import { securityHeaders } from '~/middleware/security-headers.server'
+import { staticFiles } from '~/middleware/static-files.server'
+
+const production = import.meta.env.PROD
+let draining = false
+
+async function pages(): Promise<ServerBuild> {
+  const build = await import('virtual:react-router/server-build')
+  return { ...build, allowedActionOrigins: [new URL(env.PUBLIC_URL).host] }
+}
+
+function contextOf(response: Response): RouterContextProvider {
+  const context = new RouterContextProvider()
+  context.set(nonceContext, response.locals.nonce)
+  context.set(requestIdContext, response.locals.requestId)
+  context.set(clientAddressContext, response.req.ip ?? '')
+  context.set(reportPatternContext, (pattern) => {
+    response.locals.pattern = pattern
+  })
+  return context
+}
+
+/** The web server. It holds no state: any number of processes may serve side by side. */
+export const app = express()
+app.disable('x-powered-by')
+app.set('trust proxy', env.TRUST_PROXY_HOPS)
+app.use(requestId)
+app.use(requestLog(log))
+app.use(securityHeaders({ publicUrl: env.PUBLIC_URL, production, tileUrl: env.TILE_URL }))
+app.get('/ready', async (_request, response) => {
+  const ok = !draining && (await ping())
+  response.status(ok ? 200 : 503).json({ ok })
+})
+app.use(compression())
+if (production) app.use(staticFiles())
+app.use(sameOrigin(env.PUBLIC_URL), limitBody)
+app.use(createRequestHandler({ build: pages, getLoadContext: (_request, response) => contextOf(response) }))
+app.use(lastResort(log))
+
+if (production) {
+  listen(app, {
+    port: env.PORT,
+    host: env.HOST,
+    log,
+    onStop: () => {
+      draining = true
+    },
+    release: () => pool.end(),
+  })
+}
