@@ -1,6 +1,6 @@
-import type { ConditionId, CornerId, PersonId } from './ids'
-import { PROOFS, type Proof } from './kinds'
-import { bestProof } from './proof'
+import type { ConditionId, CornerId } from './ids'
+import type { MarkKind } from './kinds'
+import { bestProof, compareProof } from './proof'
 import type { BookView, CornerView, LandmarkView, StretchView } from './view'
 
 /** What the overview of a book needs: no marks, no cards beyond a line's worth. */
@@ -28,11 +28,11 @@ export interface OverviewCorner {
   marks: number
 }
 
-/**
- * What a corner's marks amount to: nothing noted yet, a draft, or the weakest proof that its brake reference (else its
- * best-proven mark) has in the condition.
- */
+/** What a corner's marks amount to: none yet, not yet seen, seen on foot, driven. */
 export type CornerState = 'empty' | 'draft' | 'seen' | 'driven'
+
+/** The kinds that stand at a thing on the ground, which a walk can check. The others happen where the car lets them. */
+const REFERENCE_KINDS: readonly MarkKind[] = ['brake', 'lift', 'turnin', 'apex', 'trackout']
 
 /** Everything of the book that the overview shows. */
 export function overviewOf(view: BookView, condition: ConditionId): Overview {
@@ -60,18 +60,17 @@ export function overviewOf(view: BookView, condition: ConditionId): Overview {
 }
 
 /**
- * A corner is seen or driven when more than half of its real places in the condition are, by anyone. A corner whose marks are
- * told, or simulator only, is a draft.
+ * A corner is as good as the weakest of its references in the condition: the best proof that anyone has of each. A reference
+ * with a simulator place only is told.
  */
 export function cornerState(corner: CornerView, condition: ConditionId): CornerState {
   const marks = corner.marks.filter((mark) => mark.condition === condition)
   if (marks.length === 0) return 'empty'
-  const proofs = marks.map(
-    (mark): Proof => (mark.real ? (bestProof(mark.real.proof, condition)?.proof ?? 'told') : 'told'),
-  )
-  const reaching = (least: Proof) => proofs.filter((proof) => PROOFS.indexOf(proof) >= PROOFS.indexOf(least)).length
-  if (reaching('driven') * 2 > proofs.length) return 'driven'
-  return reaching('seen') * 2 > proofs.length ? 'seen' : 'draft'
+  const references = marks.filter((mark) => REFERENCE_KINDS.includes(mark.kind))
+  const judged = references.length > 0 ? references : marks
+  const proofs = judged.map((mark) => (mark.real && bestProof(mark.real.proof, condition)?.proof) ?? 'told')
+  const weakest = proofs.reduce((worst, proof) => (compareProof(proof, worst) < 0 ? proof : worst))
+  return weakest === 'told' ? 'draft' : weakest
 }
 
 /** One corner with what lies beside its road. */
@@ -127,6 +126,3 @@ function nearStretch(length: number, corner: CornerView, reach: number) {
       (place) => place && (inside(place.station) || (place.until !== null && inside(place.until))),
     )
 }
-
-/** Whether a mark may be read as this person's own. */
-export const isOwn = (mark: { forPerson: PersonId | null }, person: PersonId) => mark.forPerson === person

@@ -83,12 +83,6 @@ export function againstSim(mark: Pick<MarkView, 'sim' | 'real'>): Metres | null 
   return mark.sim && mark.real ? metres(mark.real.toDatum - mark.sim.toDatum) : null
 }
 
-/** Where a station lies against a datum, for reading: metres without sign, and on which side. */
-export function toDatumWords(toDatum: Metres): { metres: Metres; side: 'before' | 'after' | 'at' } {
-  const whole = Math.round(Math.abs(toDatum))
-  return { metres: metres(Math.abs(toDatum)), side: whole === 0 ? 'at' : toDatum < 0 ? 'before' : 'after' }
-}
-
 /** The station of typed metres before or after a datum. */
 export function stationFromTyped(
   datum: Station,
