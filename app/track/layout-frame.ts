@@ -3,11 +3,13 @@ import {
   headingAt as drawnHeadingAt,
   heightAt as drawnHeightAt,
   locate as drawnLocate,
+  planePointAt as drawnPlanePointAt,
   pointAt as drawnPointAt,
   sliceOf as drawnSliceOf,
   type Location,
 } from '~/track/centreline'
 import { type LapFrame, makeLapFrame, wrap } from '~/track/lap-frame'
+import type { PlanePoint } from '~/track/plane'
 import {
   type Along,
   across,
@@ -31,6 +33,8 @@ export interface LayoutFrame extends LapFrame {
   /** Station and offset of a position; the hint picks the branch as in `locate` of `centreline.ts`. */
   locate(lngLat: LngLat | Position, hint?: Station): Location
   pointAt(station: Station, offset?: Offset | 0): LngLat
+  /** The same point in the centreline's plane, metres east and north. */
+  planePointAt(station: Station, offset?: Offset | 0): PlanePoint
   /** Direction of travel, degrees clockwise from true north. */
   headingAt(station: Station): Degrees
   heightAt(station: Station): Metres | null
@@ -45,6 +49,7 @@ export function makeFrame(centreline: Centreline, lap: { startAlong: Along; reve
   const frame = makeLapFrame({ length: centreline.length, ...lap })
   // The centreline's own stations are metres along as drawn.
   const drawn = (value: Station) => station(frame.toAlong(value))
+  const drawnSide = (value: Offset | 0) => (lap.reversed ? (-value as Offset) : value)
   return {
     ...frame,
     centreline,
@@ -52,7 +57,8 @@ export function makeFrame(centreline: Centreline, lap: { startAlong: Along; reve
       const found = drawnLocate(centreline, lngLat, hint === undefined ? undefined : drawn(hint))
       return { station: frame.toStation(along(found.station)), offset: frame.toOffset(across(found.offset)) }
     },
-    pointAt: (value, offset = 0) => drawnPointAt(centreline, drawn(value), lap.reversed ? (-offset as Offset) : offset),
+    pointAt: (value, offset = 0) => drawnPointAt(centreline, drawn(value), drawnSide(offset)),
+    planePointAt: (value, offset = 0) => drawnPlanePointAt(centreline, drawn(value), drawnSide(offset)),
     headingAt: (value) => degrees(wrap(drawnHeadingAt(centreline, drawn(value)) + (lap.reversed ? 180 : 0), 360)),
     heightAt: (value) => drawnHeightAt(centreline, drawn(value)),
     roadDistance: frame.ahead,
