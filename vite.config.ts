@@ -7,7 +7,11 @@ export default defineConfig({
   resolve: { tsconfigPaths: true },
   environments: {
     ssr: {
-      build: { rollupOptions: { input: { index: './app/server.ts' } } },
+      build: {
+        rollupOptions: {
+          input: { index: './app/server.ts', migrate: './app/db/migrate.ts', seed: './seed/seed.ts' },
+        },
+      },
     },
   },
 })

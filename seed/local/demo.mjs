@@ -1,0 +1,36 @@
+import { createHash } from 'node:crypto'
+import { existsSync, readFileSync, writeFileSync } from 'node:fs'
+import { join } from 'node:path'
+import { must } from './command.mjs'
+import { root, stateFolder } from './places.mjs'
+import { secrets } from './secrets.mjs'
+
+const stamp = join(stateFolder, 'demo')
+
+/** The password of the demo's people: the one asked for, else a generated one. */
+export const demoPassword = () => process.env.DEMO_PASSWORD || secrets().demo
+
+/** Puts the demo into an empty database; into one that has it only the passwords. */
+export async function seedDemo(env) {
+  await must('The demo could not be made.', [process.execPath, 'build/server/seed.js'], {
+    env: { ...env, NODE_ENV: 'production' },
+    log: 'seed',
+  })
+}
+
+/** Makes the demo once for each database, and again where its password changed. */
+export async function ensureDemo(env) {
+  const given = createHash('sha256').update(`${env.OWNER_DATABASE_URL}\0${env.DEMO_PASSWORD}`).digest('hex')
+  if (existsSync(stamp) && readFileSync(stamp, 'utf8') === given) return 'present'
+  await seedDemo(env)
+  writeFileSync(stamp, given)
+  return 'made'
+}
+
+/** The lines that tell how to sign in. */
+export function signIns(password) {
+  const { teams } = JSON.parse(readFileSync(join(root, 'seed/demo-people.json'), 'utf8'))
+  const people = teams.flatMap((team) => team.people.map((person) => ({ ...person, team: team.name })))
+  const width = Math.max(...people.map((person) => person.email.length))
+  return people.map(({ email, role, team }) => `  ${email.padEnd(width)}  ${password}  ${role}, ${team}`)
+}
