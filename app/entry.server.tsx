@@ -9,11 +9,13 @@ import {
   type RouterContextProvider,
   ServerRouter,
 } from 'react-router'
+import { GeometryContext } from '~/components/geometry/geometry-store'
 import { NonceContext } from '~/components/nonce'
 import { errorEntry } from '~/error-entry.server'
 import { log } from '~/log.server'
 import { BodyTooLarge } from '~/middleware/body-limit.server'
 import { nonceContext, requestIdContext } from '~/middleware/context'
+import { geometryContext, serverStore } from '~/middleware/geometry.server'
 
 /** Milliseconds after which loaders still waiting in a document are given up. */
 export const streamTimeout = 5_000
@@ -56,7 +58,9 @@ export default function handleRequest(
     }
     const { pipe, abort } = renderToPipeableStream(
       <NonceContext value={nonce}>
-        <ServerRouter context={routerContext} url={request.url} nonce={nonce} />
+        <GeometryContext value={serverStore(context.get(geometryContext))}>
+          <ServerRouter context={routerContext} url={request.url} nonce={nonce} />
+        </GeometryContext>
       </NonceContext>,
       {
         nonce,

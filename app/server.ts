@@ -8,6 +8,7 @@ import { listen } from '~/listen.server'
 import { log } from '~/log.server'
 import { limitBody } from '~/middleware/body-limit.server'
 import { clientAddressContext, nonceContext, reportPatternContext, requestIdContext } from '~/middleware/context'
+import { geometryContext, makeRequestGeometry } from '~/middleware/geometry.server'
 import { lastResort } from '~/middleware/last-resort.server'
 import { requestId } from '~/middleware/request-id.server'
 import { requestLog } from '~/middleware/request-log.server'
@@ -28,6 +29,7 @@ function contextOf(response: Response): RouterContextProvider {
   context.set(nonceContext, response.locals.nonce)
   context.set(requestIdContext, response.locals.requestId)
   context.set(clientAddressContext, response.req.ip ?? '')
+  context.set(geometryContext, makeRequestGeometry())
   context.set(reportPatternContext, (pattern) => {
     response.locals.pattern = pattern
   })

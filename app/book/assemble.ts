@@ -114,7 +114,7 @@ function makePlaceReader(rows: BookRows, frame: LapFrame): PlaceReader {
       station,
       offset: frame.toOffset(across(at.across)),
       toDatum: frame.gap(datum, station),
-      tie: place.tie,
+      stored: place,
       proof: proofOf(at, found, frame.length),
     }
   }

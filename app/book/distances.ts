@@ -1,4 +1,4 @@
-import { type Metres, type MetresPerSecond, metres, type Seconds, type Station, seconds } from '~/track/units'
+import { type Metres, type MetresPerSecond, metres, type Seconds, seconds } from '~/track/units'
 import { placeOf } from './assemble'
 import type { Ground } from './kinds'
 import type { ReadMark } from './marks-for'
@@ -81,13 +81,4 @@ export function secondsBetween(
 /** The real place against the simulator's, signed metres along the road: negative is sooner here, positive later. */
 export function againstSim(mark: Pick<MarkView, 'sim' | 'real'>): Metres | null {
   return mark.sim && mark.real ? metres(mark.real.toDatum - mark.sim.toDatum) : null
-}
-
-/** The station of typed metres before or after a datum. */
-export function stationFromTyped(
-  datum: Station,
-  typed: { metres: number; side: 'before' | 'after' },
-  wrapStation: (value: number) => Station,
-): Station {
-  return wrapStation(datum + (typed.side === 'before' ? -typed.metres : typed.metres))
 }

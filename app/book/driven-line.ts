@@ -3,8 +3,8 @@ import { type Metres, metres, type Offset, offset, type Station, station } from 
 import type { DrivenDistance, Placed } from './distances'
 
 /**
- * The line driven through a corner's marks: offsets between two marks follow a monotone cubic (Fritsch and Carlson, SIAM J.
- * Numer. Anal. 17, 1980), so that the line never swings wider than the marks it joins. Before the first and after the last
+ * The line driven through a corner's marks: offsets between two marks follow a monotone cubic (harmonic mean of the two
+ * secants as slope: Fritsch and Butland, SIAM J. Sci. Stat. Comput. 5, 1984; from memory), so that the line never swings wider than the marks it joins. Before the first and after the last
  * mark it keeps their offset.
  */
 export interface DrivenLine {

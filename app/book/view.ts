@@ -25,7 +25,7 @@ import type {
   StretchKind,
   TurnDirection,
 } from './kinds'
-import type { KerbNote, Tie } from './place'
+import type { KerbNote, Place } from './place'
 
 export const BOOK_VIEW_VERSION = 1
 
@@ -126,7 +126,8 @@ export interface PlaceView {
   offset: Offset
   /** Signed metres along the road to the card's datum: negative before it. Shown without a sign. */
   toDatum: Metres
-  tie: Tie | null
+  /** As it is stored, in metres of the drawn line, with its tie: what an operation on it starts from. */
+  stored: Place
   /** Best standing proof per person and condition. */
   proof: ProofView[]
 }

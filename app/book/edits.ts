@@ -1,0 +1,123 @@
+import { type LapFrame, wrap } from '~/track/lap-frame'
+import { type Offset, offset, type Station, station } from '~/track/units'
+import type { CardId, ConditionId, MarkId, OperationId, PersonId } from './ids'
+import type { BrakeRole, Ground, Manner, MarkKind } from './kinds'
+import type { FieldChange, Json, Operation, Scope } from './operation'
+import { OPERATION_VERSION } from './operation'
+import type { Place } from './place'
+import type { PlaceView } from './view'
+
+/** What a person does on a page, turned into operations. Ids and the instant come from whoever does it. */
+
+export interface Making {
+  id: OperationId
+  madeAt: string
+  scope: Scope
+}
+
+/** A place as a person gives it. */
+export interface GivenPlace {
+  station: Station
+  offset: Offset
+}
+
+export interface NewMark {
+  id: MarkId
+  card: CardId
+  kind: MarkKind
+  role: BrakeRole | null
+  manner: Manner | null
+  condition: ConditionId
+  forPerson: PersonId | null
+  gear: number | null
+  /** m/s */
+  speed: number | null
+  ground: Ground
+  at: GivenPlace
+}
+
+/** Adds a mark with one place. */
+export function addMark(making: Making, mark: NewMark, frame: LapFrame): Operation {
+  const fields: Record<string, Json> = {
+    state: 'live',
+    cardId: mark.card,
+    kind: mark.kind,
+    conditionId: mark.condition,
+    [mark.ground]: storedPlace(mark.at, null, frame),
+  }
+  const optional = {
+    role: mark.role,
+    manner: mark.manner,
+    forPerson: mark.forPerson,
+    gear: mark.gear,
+    speed: mark.speed,
+  }
+  for (const [field, value] of Object.entries(optional)) if (value !== null) fields[field] = value
+  return operation(making, mark.id, fromNothing(fields))
+}
+
+/**
+ * Puts one place of a mark elsewhere, or gives it one. A place put elsewhere by hand no longer hangs on its landmark's
+ * measure; the words of its tie stay, since only a person can say whether they still hold.
+ * @param seen the place as the person saw it, null where the mark had none
+ */
+export function placeMark(
+  making: Making,
+  mark: MarkId,
+  ground: Ground,
+  seen: Place | null,
+  at: GivenPlace,
+  frame: LapFrame,
+): Operation {
+  const tie = seen?.tie ? { ...seen.tie, along: null } : null
+  return operation(making, mark, { [ground]: { from: asJson(seen), to: storedPlace(at, tie, frame) } })
+}
+
+/** Takes one of a mark's two places away. */
+export function clearPlace(making: Making, mark: MarkId, ground: Ground, seen: Place): Operation {
+  return operation(making, mark, { [ground]: { from: asJson(seen), to: null } })
+}
+
+/** Takes a mark off the book; it can be taken back. */
+export function dropMark(making: Making, mark: MarkId): Operation {
+  return operation(making, mark, { state: { from: 'live', to: 'dropped' } })
+}
+
+/** A place nudged along the road (forward positive) and across it (left positive), in metres. */
+export function nudged(place: PlaceView, by: { ahead: number; left: number }, frame: LapFrame): GivenPlace {
+  return { station: station(wrap(place.station + by.ahead, frame.length)), offset: offset(place.offset + by.left) }
+}
+
+/** The place of typed metres before or after the datum and left or right of the middle of the road. */
+export function typedPlace(
+  datum: Station,
+  typed: { metres: number; side: 'before' | 'after'; across: number; hand: 'left' | 'right' },
+  frame: Pick<LapFrame, 'length'>,
+): GivenPlace {
+  const signed = typed.side === 'before' ? -typed.metres : typed.metres
+  return {
+    station: station(wrap(datum + signed, frame.length)),
+    offset: offset(typed.hand === 'left' ? typed.across : -typed.across),
+  }
+}
+
+function storedPlace(at: GivenPlace, tie: Place['tie'], frame: LapFrame): Json {
+  const place: Place = { along: frame.toAlong(at.station), across: frame.toAcross(at.offset), tie }
+  return asJson(place)
+}
+
+/** Metres to the millimetre: what the write path stores, so that the next `from` equals it. */
+const millimetre = (value: number) => Math.round(value * 1000) / 1000 + 0
+
+function asJson(place: Place | null): Json {
+  if (!place) return null
+  return { along: millimetre(place.along), across: millimetre(place.across), tie: place.tie as Json }
+}
+
+function fromNothing(fields: Record<string, Json>): Record<string, FieldChange> {
+  return Object.fromEntries(Object.entries(fields).map(([field, to]) => [field, { from: null, to }]))
+}
+
+function operation(making: Making, mark: MarkId, set: Record<string, FieldChange>): Operation {
+  return { ...making, v: OPERATION_VERSION, target: { kind: 'mark', id: mark }, set }
+}
