@@ -1,0 +1,112 @@
+import type {
+  BrakeRole,
+  ConditionKind,
+  Ground,
+  LandmarkKind,
+  Manner,
+  MarkKind,
+  Proof,
+  Role,
+  StretchKind,
+  TurnDirection,
+} from '~/book/kinds'
+import { formatGear } from './measures'
+
+/** The closed vocabularies of a book, in the words of drivers. */
+
+const MARKS: Record<MarkKind, string> = {
+  look: 'Look',
+  brake: 'Brake',
+  lift: 'Lift',
+  gear: 'Gear',
+  turnin: 'Turn in',
+  release: 'Brake off',
+  apex: 'Apex',
+  throttle: 'Throttle',
+  full: 'Full throttle',
+  trackout: 'Track out',
+}
+
+const BRAKES: Record<BrakeRole, string> = { start: 'Brake first', target: 'Build to' }
+
+/** A mark's kind: "Turn in"; a brake by its role: "Brake first", "Build to"; a gear with its digit: "Gear 3". */
+export function markKind(kind: MarkKind, role: BrakeRole | null = null, gear: number | null = null): string {
+  if (kind === 'brake' && role) return BRAKES[role]
+  if (kind === 'gear' && gear !== null) return `Gear ${gear}`
+  return MARKS[kind]
+}
+
+const NUMBERS = ['none', 'one', 'two', 'three', 'four', 'five']
+
+/** A change of gear: "down two to 3rd". */
+export function gearChange(downshifts: number, gear: number): string {
+  return `down ${NUMBERS[downshifts] ?? downshifts} to ${formatGear(gear)}`
+}
+
+const PROOF_WORDS: Record<Proof, string> = { told: 'told', seen: 'seen on foot', driven: 'driven' }
+export const proofWord = (proof: Proof): string => PROOF_WORDS[proof]
+
+const MANNER_WORDS: Record<Manner, string> = { brush: 'brush', full: 'full', trail: 'trail', squeeze: 'squeeze' }
+export const mannerWord = (manner: Manner): string => MANNER_WORDS[manner]
+
+const GROUND_WORDS: Record<Ground, string> = { sim: 'Simulator', real: 'Real track' }
+export const groundWord = (ground: Ground): string => GROUND_WORDS[ground]
+
+const CONDITION_WORDS: Record<ConditionKind, string> = {
+  dry: 'Dry',
+  wet: 'Wet',
+  'damp-off-line': 'Damp off line',
+  'cold-tyres': 'Cold tyres',
+  'worn-tyres': 'Worn tyres',
+  'full-fuel': 'Full fuel',
+  night: 'Night',
+  other: 'Other',
+}
+export const conditionWord = (kind: ConditionKind): string => CONDITION_WORDS[kind]
+
+const ROLE_WORDS: Record<Role, string> = { manager: 'manager', coach: 'coach', driver: 'driver' }
+export const roleWord = (role: Role): string => ROLE_WORDS[role]
+
+const TURN_WORDS: Record<TurnDirection, string> = { left: 'left', right: 'right' }
+export const turnWord = (direction: TurnDirection): string => TURN_WORDS[direction]
+
+const LANDMARKS: Record<LandmarkKind, string> = {
+  kerb: 'kerb',
+  'distance-board': 'distance board',
+  'marshal-post': 'marshal post',
+  'light-panel': 'light panel',
+  sign: 'sign',
+  gantry: 'gantry',
+  bridge: 'bridge',
+  wall: 'wall',
+  'wall-end': 'end of the wall',
+  'tyre-wall': 'tyre wall',
+  'tyre-bundle': 'tyre bundle',
+  bales: 'bales',
+  cone: 'cone',
+  'marker-post': 'marker post',
+  line: 'line',
+  seam: 'seam',
+  patch: 'patch',
+  bump: 'bump',
+  drain: 'drain',
+  'standing-water': 'standing water',
+  building: 'building',
+  mast: 'mast',
+  'timing-line': 'timing line',
+  'safety-car-line': 'safety-car line',
+  'pit-entry-line': 'pit entry line',
+  'pit-exit-line': 'pit exit line',
+  'pit-speed-line': 'pit speed line',
+}
+export const landmarkWord = (kind: LandmarkKind): string => LANDMARKS[kind]
+
+const STRETCHES: Record<StretchKind, string> = {
+  surface: 'surface',
+  grip: 'grip',
+  camber: 'camber',
+  height: 'height',
+  drainage: 'drainage',
+  'layout-part': 'part of the layout',
+}
+export const stretchWord = (kind: StretchKind): string => STRETCHES[kind]
