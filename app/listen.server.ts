@@ -28,11 +28,15 @@ function closed(server: Server): Promise<void> {
 
 /**
  * Listens, and stops in order on SIGTERM, SIGINT or when the process that started this one is gone: no new connections,
- * 10 s for what is under way, then `release`, then exit 0. A second signal ends the process at once.
+ * 10 s for what is under way, then `release`, then exit 0. A second signal ends the process at once. A process that
+ * started this one over a channel is told `listening`.
  */
 export function listen(app: Express, { port, host, log, onStop, release }: Options): Server {
   const server = host ? app.listen(port, host) : app.listen(port)
-  server.on('listening', () => log.info({ port }, 'listening'))
+  server.on('listening', () => {
+    log.info({ port }, 'listening')
+    process.send?.('listening')
+  })
   server.on('error', (error: NodeJS.ErrnoException) => {
     const say = startFailures[error.code ?? '']
     process.stderr.write(`${say ? say(port) : error.message}\n`)

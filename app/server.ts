@@ -31,7 +31,7 @@ function contextOf(response: Response): RouterContextProvider {
   context.set(clientAddressContext, response.req.ip ?? '')
   context.set(geometryContext, makeRequestGeometry())
   context.set(reportPatternContext, (pattern) => {
-    response.locals.pattern = pattern
+    response.locals.pattern = `/${pattern.replace(/^\//, '')}`
   })
   return context
 }

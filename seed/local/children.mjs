@@ -1,5 +1,4 @@
 import { spawn } from 'node:child_process'
-import { setTimeout as wait } from 'node:timers/promises'
 import { atEnd } from './lifetime.mjs'
 import { root } from './places.mjs'
 import { Stop } from './steps.mjs'
@@ -10,7 +9,8 @@ import { Stop } from './steps.mjs'
  *
  * @param {string[]} command arguments for Node
  * @param {Record<string, string | undefined>} env added to this command's environment
- * @returns {{ ended: Promise<number> }} `ended` gives the exit code
+ * @returns {{ ended: Promise<number>, listening: Promise<void> }} `ended` gives the exit code; `listening` is told by
+ *   the process itself
  */
 export function startProcess(command, env, output = 'inherit') {
   const child = spawn(process.execPath, command, {
@@ -20,31 +20,22 @@ export function startProcess(command, env, output = 'inherit') {
     detached: true,
   })
   const ended = new Promise((resolve) => child.once('exit', (code, signal) => resolve(code ?? (signal ? 1 : 0))))
+  const listening = new Promise((resolve) => child.on('message', (text) => text === 'listening' && resolve()))
   atEnd(async () => {
     if (child.exitCode === null && child.signalCode === null) child.kill('SIGTERM')
     await ended
   })
-  return { ended }
+  return { ended, listening }
 }
 
-/** Waits until an address answers 200. @throws {Stop} when the process ended before, or after a minute */
-export async function untilAnswers(address, { ended }, name) {
-  let code
-  ended.then((value) => {
-    code = value
-  })
-  for (let tries = 0; tries < 600; tries += 1) {
-    if (code !== undefined) throw new Stop(`The ${name} ended before it answered.`)
-    if (await answers(address)) return
-    await wait(100)
-  }
-  throw new Stop(`The ${name} does not answer.`)
-}
-
-async function answers(address) {
-  try {
-    return (await fetch(address, { signal: AbortSignal.timeout(5_000) })).ok
-  } catch {
-    return false
-  }
+/**
+ * Waits until a web server listens and its database answers.
+ *
+ * @throws {Stop} when it ended before, or does not answer
+ */
+export async function untilHealthy(address, { ended, listening }) {
+  const code = await Promise.race([ended, listening])
+  if (code !== undefined) throw new Stop('The web server ended before it answered.')
+  const answer = await fetch(`${address}/health`, { signal: AbortSignal.timeout(30_000) })
+  if (!answer.ok) throw new Stop('The web server does not reach its database.')
 }

@@ -1,4 +1,13 @@
-import { appendFileSync, chownSync, existsSync, mkdirSync, readFileSync, readlinkSync, rmSync, writeFileSync } from 'node:fs'
+import {
+  appendFileSync,
+  chownSync,
+  existsSync,
+  mkdirSync,
+  readFileSync,
+  readlinkSync,
+  rmSync,
+  writeFileSync,
+} from 'node:fs'
 import { join } from 'node:path'
 import { capture, must, unprivileged } from './command.mjs'
 import { asRoot } from './places.mjs'
@@ -70,7 +79,8 @@ export class Cluster {
 
   async #initialise() {
     const socket = join(this.#socketFolder, '.s.PGSQL.65535')
-    if (socket.length > longestSocketPath) throw new Stop(`The path of the database's folder is too long: ${this.#folder}`)
+    if (socket.length > longestSocketPath)
+      throw new Stop(`The path of the database's folder is too long: ${this.#folder}`)
     await makeOwnFolder(this.#folder)
     await makeOwnFolder(this.#socketFolder)
     this.version = newestVersion()
@@ -79,11 +89,10 @@ export class Cluster {
     const command = [this.#program('initdb'), '--pgdata', fresh, '--encoding=UTF8', '--locale=C.UTF-8']
     const rights = ['--auth-local=peer', '--auth-host=scram-sha-256']
     const speed = this.#throwAway ? ['--no-sync'] : []
-    await must(
-      'The database cluster could not be made.',
-      unprivileged([...command, ...rights, ...speed]),
-      { cwd: '/', log: 'initdb' },
-    )
+    await must('The database cluster could not be made.', unprivileged([...command, ...rights, ...speed]), {
+      cwd: '/',
+      log: 'initdb',
+    })
     appendFileSync(join(fresh, 'postgresql.conf'), settings(this.#socketFolder, this.#throwAway))
     await must('The database cluster could not be made.', unprivileged(['mv', fresh, this.#data]), { cwd: '/' })
   }
@@ -129,7 +138,17 @@ export class Cluster {
     this.port = await this.#choosePort()
     const log = join(this.#folder, 'log')
     const from = existsSync(log) ? readFileSync(log, 'utf8').length : 0
-    const start = ['--pgdata', this.#data, '--log', log, '--wait', '--timeout=90', '--options', `-p ${this.port}`, 'start']
+    const start = [
+      '--pgdata',
+      this.#data,
+      '--log',
+      log,
+      '--wait',
+      '--timeout=90',
+      '--options',
+      `-p ${this.port}`,
+      'start',
+    ]
     const result = await capture(unprivileged([this.#program('pg_ctl'), ...start]), { cwd: '/' })
     if (result.code !== 0) this.#refused(existsSync(log) ? readFileSync(log, 'utf8').slice(from) : result.output)
     return `${made}started on port ${this.port}`
@@ -137,7 +156,9 @@ export class Cluster {
 
   #refused(output) {
     const fatal = output.split('\n').filter((line) => /FATAL|PANIC|could not/.test(line))
-    const reason = /no space left/i.test(output) ? 'The disk is full.' : (fatal.at(-1) ?? output.trim().split('\n').at(-1))
+    const reason = /no space left/i.test(output)
+      ? 'The disk is full.'
+      : (fatal.at(-1) ?? output.trim().split('\n').at(-1))
     throw new Stop(`PostgreSQL does not start: ${reason}`)
   }
 

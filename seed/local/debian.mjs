@@ -22,7 +22,8 @@ export async function ensurePackages(names) {
   if (missing.length === 0) return 'present'
   const install = ['apt-get', 'install', '--yes', '--no-install-recommends', ...missing]
   const byHand = `sudo ${install.join(' ')}`
-  if (!existsSync('/usr/bin/apt-get')) throw new Stop(`Missing: ${missing.join(', ')}. This is not Debian: install by hand.`)
+  if (!existsSync('/usr/bin/apt-get'))
+    throw new Stop(`Missing: ${missing.join(', ')}. This is not Debian: install by hand.`)
   const mayInstall = asRoot || (await capture(['sudo', '-n', 'true'])).code === 0
   if (!mayInstall) throw new Stop(`Missing Debian packages. Install them with: ${byHand}`)
   // RUNLEVEL=1 keeps Debian from starting a database server of its own after the installation.

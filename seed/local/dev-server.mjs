@@ -14,7 +14,7 @@ web.use(async (request, response, next) => {
   }
 })
 
-const server = web.listen(Number(process.env.PORT), process.env.HOST || undefined)
+const server = web.listen(Number(process.env.PORT), process.env.HOST || undefined, () => process.send?.('listening'))
 
 async function stop() {
   server.close()

@@ -52,11 +52,12 @@ export async function main(work) {
   }
 }
 
-/** When a process started, in the kernel's ticks; undefined when there is no such process. With the id it names a process for good. */
+/** When a process started, in the kernel's ticks; undefined when none of that id runs. With the id it names a process for good. */
 function startOf(pid) {
   try {
     const stat = readFileSync(`/proc/${pid}/stat`, 'utf8')
-    return stat.slice(stat.lastIndexOf(')') + 2).split(' ')[19]
+    const fields = stat.slice(stat.lastIndexOf(')') + 2).split(' ')
+    return fields[0] === 'Z' ? undefined : fields[19]
   } catch (error) {
     if (error.code === 'ENOENT' || error.code === 'ESRCH') return undefined
     throw error

@@ -25,14 +25,16 @@ export const isFree = (port, host) =>
 export async function webPort(command) {
   const text = process.env.PORT || '3000'
   const port = Number(text)
-  if (!Number.isInteger(port) || port < 1 || port > 65_535) throw new Stop(`PORT must be a number from 1 to 65535, not "${text}".`)
+  if (!Number.isInteger(port) || port < 1 || port > 65_535)
+    throw new Stop(`PORT must be a number from 1 to 65535, not "${text}".`)
   try {
     await listenOnce({ port, host: process.env.HOST || undefined })
   } catch (error) {
     if (error.code === 'EADDRINUSE') {
       throw new Stop(`Port ${port} is in use by another program. Choose another: PORT=${port + 1} ${command}`)
     }
-    if (error.code === 'EACCES') throw new Stop(`Port ${port} is reserved for root. Choose another: PORT=3000 ${command}`)
+    if (error.code === 'EACCES')
+      throw new Stop(`Port ${port} is reserved for root. Choose another: PORT=3000 ${command}`)
     throw new Stop(`Port ${port} cannot be opened: ${error.message}`)
   }
   return port

@@ -8,7 +8,7 @@ import { ensurePackages } from './debian.mjs'
 import { demoPassword, ensureDemo } from './demo.mjs'
 import { ensureDependencies } from './dependencies.mjs'
 import { alone, atEnd, joinRuns, leaveRuns } from './lifetime.mjs'
-import { localFolder, makeFolders, root, stateFolder } from './places.mjs'
+import { makeFolders, root, stateFolder } from './places.mjs'
 import { secrets } from './secrets.mjs'
 import { Stop, step } from './steps.mjs'
 

@@ -1,4 +1,4 @@
-import { startProcess, untilAnswers } from './children.mjs'
+import { startProcess, untilHealthy } from './children.mjs'
 import { signIns } from './demo.mjs'
 import { main } from './lifetime.mjs'
 import { webPort } from './ports.mjs'
@@ -17,7 +17,7 @@ export function serveDemo({ command, server, env }) {
     const prepared = await prepare()
     const web = startProcess(server, { ...prepared.env, ...env, PORT: String(port) })
     const host = process.env.HOST || 'localhost'
-    await step('Web server', () => untilAnswers(`http://${host}:${port}/health`, web, 'web server'))
+    await step('Web server', () => untilHealthy(`http://${host}:${port}`, web))
     console.log(`\nTurnstone: ${process.env.PUBLIC_URL || `http://${host}:${port}`}\n`)
     console.log(['Sign in as', ...signIns(prepared.password), '', 'Ctrl-C stops all of it.'].join('\n'))
     return (await web.ended) || 1

@@ -8,7 +8,10 @@ export class Stop extends Error {
 
 const known = [
   [/no space left on device|ENOSPC/i, 'The disk is full.'],
-  [/EAI_AGAIN|ENOTFOUND|ETIMEDOUT|ECONNREFUSED.*registry|Temporary failure resolving/i, 'The network cannot be reached.'],
+  [
+    /EAI_AGAIN|ENOTFOUND|ETIMEDOUT|ECONNREFUSED.*registry|Temporary failure resolving/i,
+    'The network cannot be reached.',
+  ],
   [/EROFS|read-only file system/i, 'The disk is read-only.'],
 ]
 
