@@ -3,7 +3,7 @@ import { makeLapFrame } from '~/track/lap-frame'
 import { along, metres, offset, station } from '~/track/units'
 import { bookRows, ids, mark, place } from '../../tests/support/book-rows'
 import { assembleBookView } from './assemble'
-import { addMark, dropMark, nudged, placeMark, typedPlace } from './edits'
+import { addMark, changeMark, dropMark, nudged, typedPlace } from './edits'
 import type { MarkId } from './ids'
 import { operationSchema } from './schemas'
 
@@ -15,6 +15,8 @@ const making = {
 }
 const frame = makeLapFrame({ length: metres(2000), startAlong: along(300), reversed: true })
 const given = { station: station(1999.99996), offset: offset(3.00049) }
+const details = { manner: null, gear: 5, speed: 50 }
+const id = uuid(3) as MarkId
 
 describe('what a person does on a page, as operations', () => {
   it('adds a mark with the fields that were given, in metres of the drawn line', () => {
@@ -48,7 +50,14 @@ describe('what a person does on a page, as operations', () => {
       words: '100 board, left',
       acrossWords: null,
     }
-    const moved = placeMark(making, uuid(3) as MarkId, 'real', place(120, 4, tie), given, frame)
+    const moved = changeMark(
+      making,
+      id,
+      'real',
+      { ...details, place: place(120, 4, tie) },
+      { ...details, at: given },
+      frame,
+    )!
     expect(moved.set.real).toEqual({
       from: { along: 120, across: 4, tie },
       to: { along: 300, across: -3, tie: { ...tie, along: null } },
@@ -58,11 +67,24 @@ describe('what a person does on a page, as operations', () => {
   it('starts from the place as it is stored, so that the write path finds it unchanged', () => {
     const view = assembleBookView(bookRows({ marks: [mark({ id: 'm-one', real: place(395.123, 4) })] }))
     const stored = view.corners[0]!.marks[0]!.real!.stored
-    expect(placeMark(making, 'm-one' as MarkId, 'real', stored, given, frame).set.real?.from).toEqual({
+    expect(
+      changeMark(making, id, 'real', { ...details, place: stored }, { ...details, at: given }, frame)?.set.real?.from,
+    ).toEqual({
       along: 395.123,
       across: 4,
       tie: null,
     })
+  })
+
+  it('carries only what differs from what was seen, and nothing where nothing does', () => {
+    const seen = { ...details, place: place(300, -3) }
+    const same = { ...details, at: given }
+    expect(changeMark(making, id, 'real', seen, same, frame)).toBeNull()
+    expect(changeMark(making, id, 'real', seen, { ...same, gear: 4, manner: 'brush' }, frame)?.set).toEqual({
+      gear: { from: 5, to: 4 },
+      manner: { from: null, to: 'brush' },
+    })
+    expect(changeMark(making, id, 'sim', { ...seen, place: null }, same, frame)?.set.sim?.from).toBeNull()
   })
 
   it('drops a mark by its state', () => {

@@ -56,21 +56,42 @@ export function addMark(making: Making, mark: NewMark, frame: LapFrame): Operati
   return operation(making, mark.id, fromNothing(fields))
 }
 
+/** What a person saw of a mark when he began to change it: the values an operation starts from. */
+export interface SeenMark {
+  /** The place on the ground he changes, null where the mark had none there. */
+  place: Place | null
+  manner: Manner | null
+  gear: number | null
+  /** m/s */
+  speed: number | null
+}
+
+/** What he leaves it at. A place that was not touched is left out. */
+export interface GivenMark extends Omit<SeenMark, 'place'> {
+  at?: GivenPlace
+}
+
 /**
- * Puts one place of a mark elsewhere, or gives it one. A place put elsewhere by hand no longer hangs on its landmark's
- * measure; the words of its tie stay, since only a person can say whether they still hold.
- * @param seen the place as the person saw it, null where the mark had none
+ * Changes one place of a mark and what goes with it; null where nothing differs from what was seen. A place put elsewhere by
+ * hand no longer hangs on its landmark's measure; the words of its tie stay, since only a person can say whether they hold.
  */
-export function placeMark(
+export function changeMark(
   making: Making,
   mark: MarkId,
   ground: Ground,
-  seen: Place | null,
-  at: GivenPlace,
+  seen: SeenMark,
+  given: GivenMark,
   frame: LapFrame,
-): Operation {
-  const tie = seen?.tie ? { ...seen.tie, along: null } : null
-  return operation(making, mark, { [ground]: { from: asJson(seen), to: storedPlace(at, tie, frame) } })
+): Operation | null {
+  const set: Record<string, FieldChange> = {}
+  if (given.at) {
+    const tie = seen.place?.tie ? { ...seen.place.tie, along: null } : null
+    const to = storedPlace(given.at, tie, frame)
+    if (!samePlace(seen.place, to)) set[ground] = { from: asJson(seen.place), to }
+  }
+  for (const field of ['manner', 'gear', 'speed'] as const)
+    if (seen[field] !== given[field]) set[field] = { from: seen[field], to: given[field] }
+  return Object.keys(set).length === 0 ? null : operation(making, mark, set)
 }
 
 /** Takes one of a mark's two places away. */
@@ -101,17 +122,22 @@ export function typedPlace(
   }
 }
 
-function storedPlace(at: GivenPlace, tie: Place['tie'], frame: LapFrame): Json {
-  const place: Place = { along: frame.toAlong(at.station), across: frame.toAcross(at.offset), tie }
-  return asJson(place)
+function storedPlace(at: GivenPlace, tie: Place['tie'], frame: LapFrame) {
+  return asJson({ along: frame.toAlong(at.station), across: frame.toAcross(at.offset), tie })
 }
+
+const samePlace = (seen: Place | null, to: { along: number; across: number }) =>
+  seen !== null && millimetre(seen.along) === to.along && millimetre(seen.across) === to.across
 
 /** Metres to the millimetre: what the write path stores, so that the next `from` equals it. */
 const millimetre = (value: number) => Math.round(value * 1000) / 1000 + 0
 
-function asJson(place: Place | null): Json {
-  if (!place) return null
-  return { along: millimetre(place.along), across: millimetre(place.across), tie: place.tie as Json }
+type StoredPlace = { along: number; across: number; tie: Json }
+
+function asJson(place: Place): StoredPlace
+function asJson(place: Place | null): StoredPlace | null
+function asJson(place: Place | null): StoredPlace | null {
+  return place && { along: millimetre(place.along), across: millimetre(place.across), tie: place.tie as Json }
 }
 
 function fromNothing(fields: Record<string, Json>): Record<string, FieldChange> {

@@ -55,7 +55,8 @@ const tie = z.strictObject({
   words: z.nullable(shortText),
   acrossWords: z.nullable(shortText),
 })
-const place = z.strictObject({ along: length, across: length, tie: z.nullable(tie) })
+/** A place as an operation carries it. */
+export const placeSchema = z.strictObject({ along: length, across: length, tie: z.nullable(tie) })
 const placement = z.strictObject({
   along: length,
   until: z.nullable(length),
@@ -109,8 +110,8 @@ export const FIELDS = {
     gear,
     downshifts: gear,
     speed,
-    sim: place,
-    real: place,
+    sim: placeSchema,
+    real: placeSchema,
   },
   layout: { state, name, startAlong: length, reversed: z.boolean(), roadWidth: length },
   corner: {
