@@ -50,6 +50,13 @@ describe('cuts of the book', () => {
     ])
   })
 
+  it('overview: a corner without marks of the condition inherits the dry ones, never their proof', () => {
+    const view = assembleBookView(bookRows({ marks, findings: [found('m-brake', 'driven', 360)] }))
+    const statesIn = (condition: typeof ids.dry) => overviewOf(view, condition).corners.map((one) => one.state)
+    expect(statesIn(ids.wet)).toEqual(['inherited', 'empty'])
+    expect(statesIn(ids.dry)).toEqual(['draft', 'empty'])
+  })
+
   it('corner: wraps previous and next round the lap and knows no other number', () => {
     const view = assembleBookView(bookRows({ marks }))
     expect(cornerOf(view, '1')).toMatchObject({ previous: '2', next: '2' })

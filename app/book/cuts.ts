@@ -28,14 +28,19 @@ export interface OverviewCorner {
   marks: number
 }
 
-/** What a corner's marks amount to: none yet, not yet seen, seen on foot, driven. */
-export type CornerState = 'empty' | 'draft' | 'seen' | 'driven'
+/**
+ * What a corner's marks amount to: none yet, none of the condition's own but the dry ones it inherits, not yet seen, seen on
+ * foot, driven.
+ */
+export const CORNER_STATES = ['empty', 'inherited', 'draft', 'seen', 'driven'] as const
+export type CornerState = (typeof CORNER_STATES)[number]
 
 /** The kinds that stand at a thing on the ground, which a walk can check. The others happen where the car lets them. */
 const REFERENCE_KINDS: readonly MarkKind[] = ['brake', 'lift', 'turnin', 'apex', 'trackout']
 
 /** Everything of the book that the overview shows. */
 export function overviewOf(view: BookView, condition: ConditionId): Overview {
+  const dry = view.conditions.find((one) => one.kind === 'dry')?.id
   return {
     book: view.book,
     circuit: view.circuit,
@@ -53,10 +58,17 @@ export function overviewOf(view: BookView, condition: ConditionId): Overview {
       gear: corner.card.gearOut,
       leastSpeed: corner.card.leastSpeed,
       flat: corner.card.flat,
-      state: cornerState(corner, condition),
+      state: stateIn(corner, condition, dry),
       marks: corner.marks.length,
     })),
   }
+}
+
+/** The state in a condition that inherits from the dry one. */
+function stateIn(corner: CornerView, condition: ConditionId, dry: ConditionId | undefined): CornerState {
+  const state = cornerState(corner, condition)
+  const inherits = state === 'empty' && dry !== condition && corner.marks.some((mark) => mark.condition === dry)
+  return inherits ? 'inherited' : state
 }
 
 /**
