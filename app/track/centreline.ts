@@ -1,3 +1,4 @@
+import { knownHeights } from '~/track/height-cleaning'
 import { wrap } from '~/track/lap-frame'
 import { segmentAt } from '~/track/locate'
 import { slantAt, slantBetween } from '~/track/offset-rays'
@@ -39,7 +40,7 @@ export interface Centreline {
   readonly north: Float64Array
   /** tan of half the turn at each vertex, left positive. */
   readonly slants: Float64Array
-  /** Height in metres of each vertex as given; NaN where the source gave none. */
+  /** Height in metres of each vertex as given; NaN where the source has none (`knownHeights`). */
   readonly heights: Float64Array
   readonly grid: SegmentGrid
 }
@@ -94,7 +95,7 @@ export function makeCentreline(positions: readonly Position[]): Centreline {
     const before = (i + count - 1) % count
     return slantBetween(east[before]!, north[before]!, east[i]!, north[i]!)
   })
-  const heights = Float64Array.from(kept, (position) => position[2] ?? Number.NaN)
+  const heights = knownHeights(kept.map((position) => position[2]))
   const grid = makeSegmentGrid(x, y)
   return {
     length: metres(stations[count]!),
@@ -173,6 +174,13 @@ export function signedGap(line: Pick<Centreline, 'length'>, from: Station, to: S
   return metres(ahead > line.length / 2 ? ahead - line.length : ahead)
 }
 
+/** A vertex as given, with its height where that is known. */
+function vertexAt(line: Centreline, i: number): Position {
+  const [longitude, latitude] = line.positions[i]!
+  const height = line.heights[i]!
+  return Number.isNaN(height) ? [longitude, latitude] : [longitude, latitude, height]
+}
+
 /** Position on the line with its height, where it has one. */
 function positionAt(line: Centreline, station: Station): Position {
   const [longitude, latitude] = pointAt(line, station)
@@ -192,7 +200,7 @@ export function sliceOf(line: Centreline, from: Station, to: Station): Position[
     const vertex = (start.segment + k) % line.count
     const ahead = wrap(line.stations[vertex]! - from, line.length)
     if (ahead >= whole || (ahead === 0 && k > 1)) break
-    if (ahead > 0) result.push(line.positions[vertex]!)
+    if (ahead > 0) result.push(vertexAt(line, vertex))
   }
   result.push(positionAt(line, to))
   return result
