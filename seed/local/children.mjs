@@ -1,6 +1,7 @@
 import { spawn } from 'node:child_process'
+import { openSync } from 'node:fs'
 import { atEnd } from './lifetime.mjs'
-import { root } from './places.mjs'
+import { logFile, root } from './places.mjs'
 import { Stop } from './steps.mjs'
 
 /**
@@ -9,10 +10,12 @@ import { Stop } from './steps.mjs'
  *
  * @param {string[]} command arguments for Node
  * @param {Record<string, string | undefined>} env added to this command's environment
+ * @param {string} [log] name of the log file that gets its output, which else goes to this command's own
  * @returns {{ ended: Promise<number>, listening: Promise<void> }} `ended` gives the exit code; `listening` is told by
  *   the process itself
  */
-export function startProcess(command, env, output = 'inherit') {
+export function startProcess(command, env, log) {
+  const output = log ? openSync(logFile(log), 'w') : 'inherit'
   const child = spawn(process.execPath, command, {
     cwd: root,
     env: { ...process.env, ...env },

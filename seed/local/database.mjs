@@ -20,9 +20,7 @@ revoke all on database ${database} from public;
 grant connect on database ${database} to ${app};
 revoke create on schema public from public;
 grant usage, create on schema public to ${owner};
-grant usage on schema public to ${app};
-alter default privileges for role ${owner} in schema public grant select, insert, update, delete on tables to ${app};
-alter default privileges for role ${owner} in schema public grant usage, select on sequences to ${app};`
+grant usage on schema public to ${app};`
 
 /**
  * Makes a database and its two roles: the owner, who migrates, and the app, which reads and writes rows and cannot
