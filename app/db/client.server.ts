@@ -16,13 +16,3 @@ pool.on('error', (error) => log.warn(errorEntry(error), 'database connection los
 
 /** The database as Drizzle sees it. */
 export const db = drizzle(pool)
-
-/** Whether the database answers. */
-export async function ping(): Promise<boolean> {
-  try {
-    await pool.query('select 1')
-    return true
-  } catch {
-    return false
-  }
-}

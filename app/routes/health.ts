@@ -1,4 +1,4 @@
-import { ping } from '~/db/client.server'
+import { ping } from '~/db/ping.server'
 
 /** 200 while the process reaches its database, else 503. */
 export async function loader() {
