@@ -1,4 +1,4 @@
-import type { Feature, FeatureCollection, LineString } from 'geojson'
+import type { FeatureCollection } from 'geojson'
 import { href } from 'react-router'
 import type { GeometryHash } from '~/book/ids'
 import { type Centreline, makeCentreline } from '~/track/centreline'
@@ -11,7 +11,9 @@ export function makeBrowserStore(): GeometryStore {
   const grounds = new Map<GeometryHash, Promise<FeatureCollection>>()
   return {
     centreline: (team, hash) =>
-      once(centrelines, hash, () => fetchJson<Feature<LineString>>(team, hash).then(toCentreline)),
+      once(centrelines, hash, () =>
+        fetchJson<{ positions: Position[] }>(team, hash).then(({ positions }) => makeCentreline(positions)),
+      ),
     ground: (team, hash) => once(grounds, hash, () => fetchJson<FeatureCollection>(team, hash)),
   }
 }
@@ -31,7 +33,3 @@ async function fetchJson<Value>(team: string, hash: GeometryHash): Promise<Value
   if (!response.ok) throw new Error(`geometry answered ${response.status}`)
   return (await response.json()) as Value
 }
-
-/** A centreline travels as a closed line: its first position again at the end. */
-const toCentreline = (feature: Feature<LineString>) =>
-  makeCentreline(feature.geometry.coordinates.slice(0, -1) as unknown as Position[])
