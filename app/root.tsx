@@ -1,11 +1,12 @@
 import encodeSans from '@fontsource-variable/encode-sans/files/encode-sans-latin-wdth-normal.woff2?url'
 import type { ReactNode } from 'react'
-import { isRouteErrorResponse, Links, Meta, Outlet, Scripts, ScrollRestoration } from 'react-router'
+import { Links, Meta, Outlet, Scripts, ScrollRestoration } from 'react-router'
 import '~/app.css'
+import { ProblemPage } from '~/components/frame/problem-page'
 import { useNonce } from '~/components/nonce'
 import { noStore } from '~/middleware/no-store'
+import { person } from '~/middleware/person.server'
 import { routePattern } from '~/middleware/route-pattern'
-import { failureWords } from '~/words/failures'
 import type { Route } from './+types/root'
 
 export const links: Route.LinksFunction = () => [
@@ -13,7 +14,7 @@ export const links: Route.LinksFunction = () => [
   { rel: 'icon', href: '/favicon.svg', type: 'image/svg+xml' },
 ]
 
-export const middleware: Route.MiddlewareFunction[] = [routePattern, noStore]
+export const middleware: Route.MiddlewareFunction[] = [routePattern, noStore, person]
 
 export function Layout({ children }: { children: ReactNode }) {
   const nonce = useNonce()
@@ -40,19 +41,9 @@ export default function App() {
 }
 
 export function ErrorBoundary({ error }: Route.ErrorBoundaryProps) {
-  const { title, text } = failureWords(isRouteErrorResponse(error) ? error.status : 500)
   return (
-    <main className="page-alone px-5 py-7">
-      <title>{`${title}. Turnstone`}</title>
-      <div className="problem max-w-lg">
-        <h1 className="h1">{title}</h1>
-        <p className="mt-2">{text}</p>
-        <p className="mt-4">
-          <a className="btn" href="/">
-            To the first page
-          </a>
-        </p>
-      </div>
-    </main>
+    <div className="page-alone">
+      <ProblemPage error={error} />
+    </div>
   )
 }

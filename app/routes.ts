@@ -1,3 +1,10 @@
-import { index, type RouteConfig, route } from '@react-router/dev/routes'
+import { index, layout, type RouteConfig, route } from '@react-router/dev/routes'
 
-export default [index('routes/home.tsx'), route('health', 'routes/health.ts')] satisfies RouteConfig
+export default [
+  index('routes/home.tsx'),
+  route('health', 'routes/health.ts'),
+  route('sign-in', 'routes/sign-in.tsx'),
+  route('sign-out', 'routes/sign-out.ts'),
+  route('teams', 'routes/teams.tsx'),
+  route('teams/:team', 'routes/team/guard.tsx', [layout('routes/team/layout.tsx', [index('routes/team/home.tsx')])]),
+] satisfies RouteConfig

@@ -16,7 +16,9 @@ const DEVICE_LENGTH = 200
 const overTls = env.PUBLIC_URL.startsWith('https:')
 
 const lucia = new Lucia(
-  new HashedSessionAdapter(new DrizzlePostgreSQLAdapter(db, sessions, people), prolongSession),
+  new HashedSessionAdapter(new DrizzlePostgreSQLAdapter(db, sessions, people), (hash, expiresAt) =>
+    prolongSession(db, hash, expiresAt),
+  ),
   {
     sessionExpiresIn: IDLE,
     sessionCookie: {

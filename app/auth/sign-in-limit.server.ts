@@ -2,7 +2,7 @@ import { createHash } from 'node:crypto'
 import { TimeSpan } from 'lucia'
 import { RateLimiterPostgres, RateLimiterRes } from 'rate-limiter-flexible'
 import { pool } from '~/db/client.server'
-import { seconds, type Seconds } from '~/track/units'
+import { type Seconds, seconds } from '~/track/units'
 import { clientOf } from './client-address'
 
 const WINDOW = new TimeSpan(15, 'm')
@@ -16,7 +16,8 @@ export const TRIES_PER_CLIENT = 100
 const perAddress = new RateLimiterPostgres({ ...TABLE, keyPrefix: 'sign-in', points: TRIES_PER_ADDRESS })
 const perClient = new RateLimiterPostgres({ ...TABLE, keyPrefix: 'sign-in-client', points: TRIES_PER_CLIENT })
 
-const pairKey = (email: string, client: string) => createHash('sha256').update(`${client}\n${email}`).digest('base64url')
+const pairKey = (email: string, client: string) =>
+  createHash('sha256').update(`${client}\n${email}`).digest('base64url')
 
 async function take(limiter: RateLimiterPostgres, key: string): Promise<Seconds | null> {
   try {

@@ -1,0 +1,44 @@
+import { getFormProps, type SubmissionResult, useForm } from '@conform-to/react'
+import { getZodConstraint, parseWithZod } from '@conform-to/zod/v4'
+import { Form, href } from 'react-router'
+import { TextField } from '~/components/form/field'
+import { FormErrors } from '~/components/form/form-errors'
+import { Button } from '~/components/ui/button'
+import { signInWords as words } from '~/words/sign-in'
+import { signInSchema } from './schema'
+
+/** E-mail address and password. Sends to the sign-in page, wherever it stands. */
+export function SignInForm({
+  lastResult,
+  next,
+}: {
+  lastResult?: SubmissionResult<string[]> | null
+  next?: string | null
+}) {
+  const [form, fields] = useForm({
+    id: 'sign-in',
+    lastResult,
+    constraint: getZodConstraint(signInSchema),
+    onValidate: ({ formData }) => parseWithZod(formData, { schema: signInSchema }),
+    shouldRevalidate: 'onInput',
+  })
+  return (
+    <Form
+      method="post"
+      action={href('/sign-in')}
+      {...getFormProps(form)}
+      className="rounded-lg border border-rule-strong bg-surface px-[18px] py-3.5"
+    >
+      <h2 className="h2">{words.title}</h2>
+      <FormErrors form={form} />
+      <div className="mt-2 grid gap-2.5">
+        <TextField field={fields.email} type="email" label={words.email} autoComplete="username" />
+        <TextField field={fields.password} type="password" label={words.password} autoComplete="current-password" />
+      </div>
+      <input type="hidden" name={fields.next.name} defaultValue={fields.next.initialValue ?? next ?? ''} />
+      <Button look="primary" size="large" className="mt-3.5 w-full">
+        {words.button}
+      </Button>
+    </Form>
+  )
+}
