@@ -2,13 +2,19 @@ import { createRequestHandler } from '@react-router/express'
 import compression from 'compression'
 import express, { type Response } from 'express'
 import { RouterContextProvider, type ServerBuild } from 'react-router'
-import { pool } from '~/db/client.server'
+import { db, pool } from '~/db/client.server'
 import { ping } from '~/db/ping.server'
 import { env } from '~/env.server'
 import { listen } from '~/listen.server'
 import { log } from '~/log.server'
 import { limitBody } from '~/middleware/body-limit.server'
-import { clientAddressContext, nonceContext, reportPatternContext, requestIdContext } from '~/middleware/context'
+import {
+  clientAddressContext,
+  dbContext,
+  nonceContext,
+  reportPatternContext,
+  requestIdContext,
+} from '~/middleware/context'
 import { geometryContext, makeRequestGeometry } from '~/middleware/geometry.server'
 import { lastResort } from '~/middleware/last-resort.server'
 import { requestId } from '~/middleware/request-id.server'
@@ -27,6 +33,7 @@ async function pages(): Promise<ServerBuild> {
 
 function contextOf(response: Response): RouterContextProvider {
   const context = new RouterContextProvider()
+  context.set(dbContext, db)
   context.set(nonceContext, response.locals.nonce)
   context.set(requestIdContext, response.locals.requestId)
   context.set(clientAddressContext, response.req.ip ?? '')

@@ -1,4 +1,8 @@
 import { createContext } from 'react-router'
+import type { Db } from '~/db/database'
+
+/** The database, for the reads and writes that a route calls: a route gets it here and imports none. */
+export const dbContext = createContext<Db>()
 
 /** Nonce of the request's Content-Security-Policy. */
 export const nonceContext = createContext<string>()
