@@ -2,8 +2,8 @@ import { createContext, type MiddlewareFunction, redirect } from 'react-router'
 import type { Actor } from '~/book/actions'
 import type { TeamId } from '~/book/ids'
 import type { Role } from '~/book/kinds'
-import { db } from '~/db/client.server'
 import { readTeamOf } from '~/db/read-people.server'
+import { dbContext } from './context'
 import { personContext, signInPath } from './person.server'
 import { refusal } from './refusal.server'
 
@@ -23,7 +23,7 @@ export const teamContext = createContext<TeamMember>()
 export const team: MiddlewareFunction<Response> = async ({ request, url, params, context }, next) => {
   const person = context.get(personContext)
   if (person === null) throw redirect(signInPath(request, url))
-  const found = await readTeamOf(db, person.id, params.team ?? '')
+  const found = await readTeamOf(context.get(dbContext), person.id, params.team ?? '')
   if (!found) throw refusal('not-found')
   const actor = { kind: 'person', person: person.id, team: found.team.id, role: found.role } as const
   context.set(teamContext, { actor, role: found.role, team: found.team })
