@@ -47,6 +47,7 @@ export interface Centreline {
 
 /** A position nearer than this to the one before says nothing about the road, and would give a segment no direction. */
 const sameSpot = 0.01
+const sameStation = 0.001
 const radian = Math.PI / 180
 
 /** The positions without repeats of the one before, the last one also against the first. */
@@ -190,10 +191,11 @@ function positionAt(line: Centreline, station: Station): Position {
 
 /**
  * The stretch of the line from one station forward to another, across the first position where need be: the place at
- * `from`, the vertices between, the place at `to`. The same station twice means the whole lap, closed.
+ * `from`, the vertices between, the place at `to`. The same station twice (to a millimetre) means the whole lap, closed.
  */
 export function sliceOf(line: Centreline, from: Station, to: Station): Position[] {
-  const whole = roadDistance(line, from, to) || line.length
+  const between = roadDistance(line, from, to)
+  const whole = between < sameStation ? line.length : between
   const start = runAt(line, from)
   const result = [positionAt(line, from)]
   for (let k = 1; k <= line.count; k++) {

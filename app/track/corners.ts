@@ -107,7 +107,7 @@ function drawnIn(span: Span, apex: number, bend: (i: number) => number): Span {
   return { from, to }
 }
 
-/** Radius of the circle through the samples round the apex; where they lie straight, that of the smoothed bend. */
+/** Radius of the circle through the samples round the apex, at most that of the smoothed bend: smoothing only widens. */
 function radiusAt(shape: Shape, tight: Span, bend: number): Metres {
   const apex = middleOf(tight)
   const reach = Math.round(Math.max(fitReach / shape.step, (tight.to - tight.from) / 2))
@@ -116,7 +116,7 @@ function radiusAt(shape: Shape, tight: Span, bend: number): Metres {
     around.map((i) => shape.x[i]!),
     around.map((i) => shape.y[i]!),
   )
-  return circle?.radius ?? metres(1 / bend)
+  return metres(Math.min(circle?.radius ?? Infinity, 1 / bend))
 }
 
 /** The bends of one sign (left +1, right −1) that make corners; places are samples of the shape. */
