@@ -1,0 +1,67 @@
+import { type Flat, gapBetween } from '~/track/read/on-plane'
+import { Points } from '~/track/read/points'
+import { count, type Problem, problem, several } from '~/track/read/problems'
+
+/** Positions nearer than this to the one before are the same place: 1 cm, the seventh decimal of a degree. */
+export const samePosition = 0.01
+/** A line of more positions than this is thinned, to one every so many metres. */
+const dense = 20_000
+const thinnedMetres = 0.5
+
+/** A line without positions that say nothing. */
+export interface Cleaned {
+  /** Indexes of the positions kept, in order. */
+  readonly kept: number[]
+  /** Whether the last position stood at the place of the first. */
+  readonly closed: boolean
+  readonly warnings: readonly Problem[]
+}
+
+/**
+ * Leaves out positions at the same place as the one before, and, of a line denser than any circuit needs, all but one
+ * each half metre: the chord of 0.5 m is short of an arc of 10 m radius by 0.01 % (Δ²/24R²), less on any wider one. A
+ * last position at the place of the first closes the ring and is left out without a word.
+ */
+export function clean(flat: Flat): Cleaned {
+  const n = flat.x.length
+  let kept = spaced(
+    flat,
+    Array.from({ length: n }, (_, i) => i),
+    samePosition,
+  )
+  const repeated = n - kept.length
+  const beforeClosing = kept.length
+  while (kept.length > 1 && gapBetween(flat, kept[0]!, kept.at(-1)!) < samePosition) kept.pop()
+  const closed = kept.length < beforeClosing
+  const warnings: Problem[] = []
+  if (repeated > 0) {
+    const says = `${several(repeated, 'position repeats', 'positions repeat')} the one before. They are left out.`
+    warnings.push(problem('duplicate-positions', says))
+  }
+  if (kept.length > dense) {
+    const all = kept.length
+    kept = spaced(flat, kept, thinnedMetres)
+    const says = `Of ${count(all)} positions ${count(kept.length)} are kept, one about every half metre. The length stays the same within 0.01\u00A0%.`
+    warnings.push(problem('thinned', says))
+  }
+  return { kept, closed, warnings }
+}
+
+function spaced(flat: Flat, indexes: readonly number[], metres: number): number[] {
+  const kept: number[] = []
+  for (const i of indexes) if (kept.length === 0 || gapBetween(flat, kept.at(-1)!, i) >= metres) kept.push(i)
+  return kept
+}
+
+/** The positions kept, as columns of their own. */
+export function pick(points: Points, flat: Flat, kept: readonly number[]): { points: Points; flat: Flat } {
+  const chosen = new Points()
+  const x = new Float64Array(kept.length)
+  const y = new Float64Array(kept.length)
+  kept.forEach((i, k) => {
+    chosen.copy(points, i)
+    x[k] = flat.x[i]!
+    y[k] = flat.y[i]!
+  })
+  return { points: chosen, flat: { x, y } }
+}

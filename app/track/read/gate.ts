@@ -1,0 +1,189 @@
+import Flatbush from 'flatbush'
+import { type Flat, gapBetween } from '~/track/read/on-plane'
+import type { Line } from '~/track/read/points'
+
+/** A lap is over where the trace returns within this many metres and degrees of heading. */
+const returnMetres = 15
+const returnDegrees = 30
+/** Shortest way round that counts as a return: no shorter circuit is read. */
+const shortestLap = 300
+/** Laps this near the median length speak for a gate. */
+const alike = 0.05
+/** Places tried as a gate, and pieces of the trace near a place beyond which it is not tried. */
+const gatesTried = 160
+const mostNear = 5000
+/** The trace is looked at in steps of this many metres, more where that would be too many steps. */
+const stepMetres = 5
+const mostSteps = 200_000
+
+/** Every few metres of a trace: which position stands there, in which stretch, and how far along. */
+interface Steps {
+  readonly at: number[]
+  readonly stretch: number[]
+  readonly along: number[]
+}
+
+/** A stretch of the trace from a gate back to it: positions `start` ≤ i < `end`. */
+export interface Round {
+  readonly start: number
+  readonly end: number
+  /** First position after the round, where the stretch goes on. */
+  readonly next: number | undefined
+}
+
+/** What the best gate gives. */
+export interface Rounds {
+  readonly rounds: readonly Round[]
+  /** Ways round that a lost fix interrupts. */
+  readonly interrupted: number
+}
+
+interface Pass {
+  readonly step: number
+  readonly along: number
+  readonly stretch: number
+  readonly distance: number
+}
+
+/**
+ * Finds the laps of a trace: the place that it passes again and again, within 15 m and 30° of heading, and the rounds from
+ * one pass to the next. Of all places tried the one wins at which most rounds are alike in length, then the one where the
+ * passes lie closest. Nothing is bridged between stretches.
+ */
+export function findRounds(flat: Flat, stretches: readonly Line[]): Rounds {
+  const steps = takeSteps(flat, stretches)
+  const pieces = indexOf(flat, steps)
+  if (!pieces) return { rounds: [], interrupted: 0 }
+  let best: { passes: Pass[]; gate: number; score: number; spread: number } | undefined
+  for (const gate of gatesOf(steps)) {
+    const passes = passesAt(flat, steps, pieces, gate)
+    const lengths = roundLengths(passes)
+    if (lengths.length === 0) continue
+    const median = [...lengths].sort((p, q) => p - q)[Math.floor((lengths.length - 1) / 2)]!
+    const near = lengths.filter((length) => Math.abs(length - median) <= alike * median).length
+    const score = 2 * near - lengths.length
+    const spread = passes.reduce((sum, pass) => sum + pass.distance, 0) / (passes.length - 1)
+    if (!best || score > best.score || (score === best.score && spread < best.spread - 1e-6)) {
+      best = { passes, gate, score, spread }
+    }
+  }
+  return best ? cut(flat, steps, stretches, best.passes, best.gate) : { rounds: [], interrupted: 0 }
+}
+
+function takeSteps(flat: Flat, stretches: readonly Line[]): Steps {
+  for (let metres = stepMetres; ; metres *= 4) {
+    const steps: Steps = { at: [], stretch: [], along: [] }
+    stretches.forEach(({ start, end }, stretch) => {
+      let along = 0
+      let last = start
+      const add = (i: number) => {
+        steps.at.push(i)
+        steps.stretch.push(stretch)
+        steps.along.push(along)
+      }
+      add(start)
+      for (let i = start + 1; i < end && steps.at.length <= mostSteps; i++) {
+        const gap = gapBetween(flat, last, i)
+        if (gap < metres && i < end - 1) continue
+        if (gap === 0) continue
+        along += gap
+        last = i
+        add(i)
+      }
+    })
+    if (steps.at.length <= mostSteps || metres > 1e6) return steps
+  }
+}
+
+/** Index of the pieces between one step and the next; piece k begins at step k. */
+function indexOf({ x, y }: Flat, { at, stretch }: Steps): Flatbush | undefined {
+  if (at.length < 3) return undefined
+  const index = new Flatbush(at.length - 1, 16, Float32Array)
+  for (let k = 0; k + 1 < at.length; k++) {
+    const [i, j] = stretch[k] === stretch[k + 1] ? [at[k]!, at[k + 1]!] : [at[k]!, at[k]!]
+    index.add(Math.min(x[i]!, x[j]!), Math.min(y[i]!, y[j]!), Math.max(x[i]!, x[j]!), Math.max(y[i]!, y[j]!))
+  }
+  index.finish()
+  return index
+}
+
+/** Steps tried as gates: evenly over the trace, the first of it among them. */
+function gatesOf({ at, stretch }: Steps): number[] {
+  const pieces = at.length - 1
+  const stride = Math.max(1, pieces / gatesTried)
+  const gates: number[] = []
+  for (let place = 0; place < pieces; place += stride) {
+    const k = Math.floor(place)
+    if (stretch[k] === stretch[k + 1]) gates.push(k)
+  }
+  return gates
+}
+
+function passesAt({ x, y }: Flat, steps: Steps, pieces: Flatbush, gate: number): Pass[] {
+  const { at, stretch, along } = steps
+  const px = x[at[gate]!]!
+  const py = y[at[gate]!]!
+  const gx = x[at[gate + 1]!]! - px
+  const gy = y[at[gate + 1]!]! - py
+  const [r, few] = [returnMetres, atMost(mostNear)]
+  const near = pieces.search(px - r, py - r, px + r, py + r, few)
+  if (near.length === mostNear) return []
+  const passes: Pass[] = []
+  for (const k of near.sort((p, q) => p - q)) {
+    if (stretch[k] !== stretch[k + 1]) continue
+    const [ax, ay] = [x[at[k]!]!, y[at[k]!]!]
+    const [dx, dy] = [x[at[k + 1]!]! - ax, y[at[k + 1]!]! - ay]
+    const length = Math.hypot(dx, dy)
+    const cosine = (dx * gx + dy * gy) / (length * Math.hypot(gx, gy))
+    if (!(cosine >= Math.cos((returnDegrees * Math.PI) / 180))) continue
+    const t = Math.min(1, Math.max(0, ((px - ax) * dx + (py - ay) * dy) / (length * length)))
+    const distance = Math.hypot(ax + t * dx - px, ay + t * dy - py)
+    if (distance > returnMetres) continue
+    const pass = { step: k, along: along[k]! + t * length, stretch: stretch[k]!, distance }
+    const last = passes.at(-1)
+    if (!last || last.stretch !== pass.stretch || pass.along - last.along >= shortestLap) passes.push(pass)
+    else if (distance < last.distance) passes[passes.length - 1] = pass
+  }
+  return passes
+}
+
+/** A filter that lets only so many through. */
+function atMost(number: number): () => boolean {
+  let passed = 0
+  return () => passed++ < number
+}
+
+function roundLengths(passes: readonly Pass[]): number[] {
+  const lengths: number[] = []
+  for (let i = 1; i < passes.length; i++) {
+    if (passes[i]!.stretch === passes[i - 1]!.stretch) lengths.push(passes[i]!.along - passes[i - 1]!.along)
+  }
+  return lengths
+}
+
+/** Cuts the trace where it crosses the line through the gate square to the heading there. */
+function cut(flat: Flat, steps: Steps, stretches: readonly Line[], passes: readonly Pass[], gate: number): Rounds {
+  const { at } = steps
+  const { x, y } = flat
+  const [px, py] = [x[at[gate]!]!, y[at[gate]!]!]
+  const [gx, gy] = [x[at[gate + 1]!]! - px, y[at[gate + 1]!]! - py]
+  const crossing = ({ step }: Pass) => {
+    for (let i = at[step]!; i <= at[step + 1]!; i++) if ((x[i]! - px) * gx + (y[i]! - py) * gy >= 0) return i
+    return at[step + 1]! + 1
+  }
+  const rounds: Round[] = []
+  let interrupted = 0
+  for (let k = 1; k < passes.length; k++) {
+    if (passes[k]!.stretch !== passes[k - 1]!.stretch) {
+      interrupted++
+      continue
+    }
+    const start = crossing(passes[k - 1]!)
+    const next = crossing(passes[k]!)
+    let end = next
+    while (end - 1 > start && gapBetween(flat, start, end - 1) < 1) end--
+    if (end - start < 2) continue
+    rounds.push({ start, end, next: next < stretches[passes[k]!.stretch]!.end ? next : undefined })
+  }
+  return { rounds, interrupted }
+}

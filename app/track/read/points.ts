@@ -1,0 +1,82 @@
+/** Positions a file may hold before it is refused. */
+export const mostPositions = 1_000_000
+
+/**
+ * Positions as columns that grow: longitude and latitude in degrees, height in metres, time in seconds since 1970, road
+ * width right and left of the line in metres. NaN where the file gives none.
+ */
+export class Points {
+  length = 0
+  lon = new Float64Array(256)
+  lat = new Float64Array(256)
+  height = new Float64Array(256)
+  time = new Float64Array(256)
+  right = new Float64Array(256)
+  left = new Float64Array(256)
+
+  push(lon: number, lat: number, height = Number.NaN, time = Number.NaN, right = Number.NaN, left = Number.NaN): void {
+    if (this.length === this.lon.length) this.grow()
+    const i = this.length++
+    this.lon[i] = lon
+    this.lat[i] = lat
+    this.height[i] = height
+    this.time[i] = time
+    this.right[i] = right
+    this.left[i] = left
+  }
+
+  /** Adds one position of another set. */
+  copy(from: Points, i: number): void {
+    this.push(from.lon[i]!, from.lat[i]!, from.height[i]!, from.time[i]!, from.right[i]!, from.left[i]!)
+  }
+
+  private grow(): void {
+    const larger = (column: Float64Array) => {
+      const next = new Float64Array(column.length * 2)
+      next.set(column)
+      return next
+    }
+    this.lon = larger(this.lon)
+    this.lat = larger(this.lat)
+    this.height = larger(this.height)
+    this.time = larger(this.time)
+    this.right = larger(this.right)
+    this.left = larger(this.left)
+  }
+}
+
+/** A run of positions `start` ≤ i < `end` that the file draws as one line. */
+export interface Line {
+  readonly start: number
+  readonly end: number
+  readonly name?: string
+  /** Where in the file it stands, in words. */
+  readonly where?: string
+}
+
+/** What a heights column is measured from: RFC 7946 has the WGS 84 ellipsoid, GPX and KML mean sea level. */
+export type HeightDatum = 'ellipsoid' | 'sea-level'
+
+/** What a file holds before one line is chosen. */
+export interface Content {
+  readonly points: Points
+  readonly lines: readonly Line[]
+  /** A trace's lines are stretches driven one after the other, never bridged; a drawing's lines may be joined end to end. */
+  readonly kind: 'drawing' | 'trace'
+  readonly name?: string
+  readonly heightDatum?: HeightDatum
+}
+
+/** Longest layout name kept. */
+const longestName = 120
+
+/** A name on one line, or nothing where it is blank. Copied letter by letter, so that it does not keep the file's text alive. */
+export function tidyName(text: string | undefined): string | undefined {
+  if (text === undefined) return undefined
+  const flat = text
+    .slice(0, 4 * longestName)
+    .replace(/[\p{Cc}\p{Cf}\p{Cs}\s]+/gu, ' ')
+    .trim()
+  const letters = Array.from(flat).slice(0, longestName)
+  return letters.length === 0 ? undefined : letters.join('').trim()
+}

@@ -1,0 +1,172 @@
+import { SaxesParser } from 'saxes'
+import { type Problem, problem } from '~/track/read/problems'
+
+/** Deepest nesting of elements, and most attributes of one element. */
+const deepest = 64
+const mostAttributes = 64
+/** Bytes given to the parser at a time: a refusal stops the walk within one of them. */
+const chunkBytes = 32 * 1024
+
+/** What an element is told about: names are without their prefix. */
+export interface XmlReader {
+  /** Returns 'skip' to leave out the element and all in it. */
+  open(name: string, attributes: Readonly<Record<string, string>>): 'skip' | undefined
+  /** Text, in pieces as it comes, of the innermost element that is not skipped. */
+  text(text: string): void
+  close(name: string): void
+}
+
+/** Where the walk stands, for the readers: `stop` ends it with a problem. */
+export interface XmlPlace {
+  where(): string
+  stop(found: Problem): void
+}
+
+/**
+ * Streams an XML document through a reader chosen by its root element. Elements count by their local name; those whose
+ * prefix is bound to a namespace that is not one of `namespaces` (nor the root's own) are left out with all in them. A
+ * prefix that is bound to nothing is taken as if it were not there. A document type declaration, broken XML, nesting
+ * deeper than 64 or more than 64 attributes in one element end the walk.
+ */
+export function walkXml(
+  body: Uint8Array,
+  decoder: TextDecoder,
+  namespaces: readonly string[],
+  readerFor: (root: string, place: XmlPlace) => XmlReader | Problem,
+): Problem | undefined {
+  const walk = new Walk(new Set(namespaces), readerFor)
+  for (let at = 0; at < body.length && !walk.found; at += chunkBytes) {
+    walk.write(decoder.decode(body.subarray(at, at + chunkBytes), { stream: true }))
+  }
+  if (!walk.found) walk.write(decoder.decode())
+  if (!walk.found) walk.end()
+  return walk.found
+}
+
+class Walk {
+  found: Problem | undefined
+  private readonly parser = new SaxesParser()
+  private reader: XmlReader | undefined
+  private depth = 0
+  private attributes = 0
+  /** Depth at which a left-out element stands; Infinity where none is open. */
+  private skippedFrom = Number.POSITIVE_INFINITY
+  /** Namespace bindings in force: undone as their element closes. */
+  private readonly bound = new Map<string, string>()
+  private readonly undo: { depth: number; prefix: string; uri: string | undefined }[] = []
+
+  constructor(
+    private readonly namespaces: Set<string>,
+    private readonly readerFor: (root: string, place: XmlPlace) => XmlReader | Problem,
+  ) {
+    this.parser.on('error', (error) => this.stop(brokenXml(error.message, this.where())))
+    this.parser.on('doctype', (text) => this.stop(doctypeProblem(text, this.where())))
+    this.parser.on('opentagstart', () => {
+      this.attributes = 0
+    })
+    this.parser.on('attribute', () => {
+      if (++this.attributes > mostAttributes) {
+        this.stop(
+          problem('xml-broken', `An element has more than ${mostAttributes} attributes. Save it again.`, this.where()),
+        )
+      }
+    })
+    this.parser.on('opentag', (tag) => this.open(tag.name, tag.attributes as Record<string, string>))
+    this.parser.on('closetag', (tag) => this.close(tag.name))
+    const text = (part: string) => {
+      if (!this.found && this.depth < this.skippedFrom) this.reader?.text(part)
+    }
+    this.parser.on('text', text)
+    this.parser.on('cdata', text)
+  }
+
+  where = () => `line ${this.parser.line}`
+
+  stop = (found: Problem) => {
+    this.found ??= found
+  }
+
+  write(text: string): void {
+    this.parser.write(text)
+  }
+
+  end(): void {
+    this.parser.close()
+    if (!this.reader) this.stop(brokenXml('', this.where()))
+  }
+
+  private open(name: string, attributes: Record<string, string>): void {
+    if (this.found) return
+    if (++this.depth > deepest) {
+      const says = `The elements are nested more than ${deepest} deep. Save the line alone.`
+      return this.stop(problem('xml-too-deep', says, this.where()))
+    }
+    if (this.depth >= this.skippedFrom) return
+    this.bind(attributes)
+    const [prefix, local] = splitName(name)
+    if (!this.reader) return this.begin(prefix, local)
+    const uri = this.bound.get(prefix)
+    const foreign = uri !== undefined && !this.namespaces.has(uri)
+    if (foreign || this.reader.open(local, attributes) === 'skip') this.skippedFrom = this.depth
+  }
+
+  /** The root: its own namespace, known or not, is the document's. */
+  private begin(prefix: string, local: string): void {
+    const home = this.bound.get(prefix)
+    const reader = this.readerFor(local, { where: this.where, stop: this.stop })
+    if ('code' in reader) return this.stop(reader)
+    this.reader = reader
+    if (home !== undefined) this.namespaces.add(home)
+  }
+
+  private bind(attributes: Record<string, string>): void {
+    for (const key in attributes) {
+      if (key !== 'xmlns' && !key.startsWith('xmlns:')) continue
+      const prefix = key === 'xmlns' ? '' : key.slice(6)
+      this.undo.push({ depth: this.depth, prefix, uri: this.bound.get(prefix) })
+      this.bound.set(prefix, attributes[key]!)
+    }
+  }
+
+  private close(name: string): void {
+    if (this.found) return
+    if (this.depth < this.skippedFrom) this.reader?.close(splitName(name)[1])
+    else if (this.depth === this.skippedFrom) this.skippedFrom = Number.POSITIVE_INFINITY
+    for (let last = this.undo.at(-1); last?.depth === this.depth; last = this.undo.at(-1)) {
+      this.undo.pop()
+      if (last.uri === undefined) this.bound.delete(last.prefix)
+      else this.bound.set(last.prefix, last.uri)
+    }
+    this.depth--
+  }
+}
+
+function splitName(name: string): [prefix: string, local: string] {
+  const colon = name.indexOf(':')
+  return colon === -1 ? ['', name] : [name.slice(0, colon), name.slice(colon + 1)]
+}
+
+function doctypeProblem(text: string, where: string): Problem {
+  if (/^\s*html\b/i.test(text)) {
+    return problem(
+      'not-the-format',
+      'The file holds a web page. Save the GPX or KML file itself and bring that.',
+      where,
+    )
+  }
+  const says = 'The file carries a document type declaration, which is not read. Take the line with <!DOCTYPE out.'
+  return problem('xml-doctype', says, where)
+}
+
+function brokenXml(detail: string, where: string): Problem {
+  // The parser's messages begin with "line:column: ".
+  const what = detail
+    .replace(/^\d+:\d+:\s*/, '')
+    .replace(/\.$/, '')
+    .slice(0, 120)
+  const says =
+    what === '' || /unclosed|unexpected end/i.test(what)
+      ? 'The file ends in the middle. Save it again from where it came.'
+      : `The XML is broken: ${what}. Save the file again from where it came.`
+  return problem('xml-broken', says, where)
+}
