@@ -6,5 +6,11 @@ export default [
   route('sign-in', 'routes/sign-in.tsx'),
   route('sign-out', 'routes/sign-out.ts'),
   route('teams', 'routes/teams.tsx'),
-  route('teams/:team', 'routes/team/guard.tsx', [layout('routes/team/layout.tsx', [index('routes/team/home.tsx')])]),
+  route('teams/:team', 'routes/team/guard.tsx', [
+    route('geometry/:hash', 'routes/team/geometry.ts'),
+    route('books/:book', 'routes/book/layout.tsx', [
+      route('corners/:number.geojson', 'routes/book/corner-geojson.ts'),
+    ]),
+    layout('routes/team/layout.tsx', [index('routes/team/home.tsx'), route('cars', 'routes/team/cars.tsx')]),
+  ]),
 ] satisfies RouteConfig

@@ -1,0 +1,81 @@
+import { Link } from 'react-router'
+import type { CardView } from '~/book/view'
+import { gearChange } from '~/words/kinds'
+import { formatGear, formatSpeed } from '~/words/measures'
+import type { CornerPageData } from './page-data'
+
+/** What the card says of the corner in words. Fields that say nothing are left out. */
+export function CardNotes({ page }: { page: CornerPageData }) {
+  const { card } = page.cut.corner
+  const setsUp = page.cut.tabs.find((tab) => tab.id === card.setsUp)
+  const texts: [string, string][] = [
+    ['Line', card.line],
+    ['Surface', card.surface],
+    ['Water', card.water],
+    ['The car', card.car],
+    ['Mistake', card.mistake],
+    ['Traffic', card.traffic],
+    ['Limits', card.limits],
+    ['Backup', card.backup],
+    ['Next', card.next],
+  ]
+  const gears = gearWords(card)
+  return (
+    <section aria-label="Card">
+      <dl className="pairs card-notes">
+        {gears ? (
+          <>
+            <dt>Gears</dt>
+            <dd>
+              <b>{gears}</b>
+            </dd>
+          </>
+        ) : null}
+        {card.kerbs.length > 0 ? (
+          <>
+            <dt>Kerbs</dt>
+            <dd>
+              {card.kerbs.map((kerb) => (
+                <p key={kerb.part}>
+                  <b>{kerb.part}</b> {kerb.words}
+                </p>
+              ))}
+            </dd>
+          </>
+        ) : null}
+        {texts.map(([term, text]) =>
+          text ? (
+            <div key={term} className="contents">
+              <dt>{term}</dt>
+              <dd className={term === 'Water' ? 'water-words' : undefined}>{text}</dd>
+            </div>
+          ) : null,
+        )}
+        {setsUp ? (
+          <>
+            <dt>Sets up</dt>
+            <dd>
+              <Link to={`../corners/${setsUp.number}`} relative="path">
+                {setsUp.number} {setsUp.name}
+              </Link>
+            </dd>
+          </>
+        ) : null}
+      </dl>
+    </section>
+  )
+}
+
+function gearWords(card: CardView): string {
+  const speed = card.leastSpeed === null ? '' : `slowest ${formatSpeed(card.leastSpeed)}`
+  if (card.flat) return card.gearIn === null ? 'Flat' : `Flat in ${formatGear(card.gearIn)}`
+  if (card.gearIn === null || card.gearOut === null) return capital(speed)
+  const down = card.gearIn - card.gearOut
+  const gears =
+    down > 0
+      ? `${formatGear(card.gearIn)} to ${formatGear(card.gearOut)}, ${gearChange(down, card.gearOut).split(' to ')[0]}`
+      : formatGear(card.gearOut)
+  return speed ? `${gears}. ${capital(speed)}` : gears
+}
+
+const capital = (words: string) => words.charAt(0).toUpperCase() + words.slice(1)

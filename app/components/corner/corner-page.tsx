@@ -1,0 +1,129 @@
+import type { SubmissionResult } from '@conform-to/react'
+import { Suspense } from 'react'
+import { Link, useSearchParams } from 'react-router'
+import { GROUNDS, type Ground } from '~/book/kinds'
+import { Icon } from '~/components/ui/icon'
+import { corner as words } from '~/words/corner'
+import { CardNotes } from './card-notes'
+import { ChangesList, ProposalsList } from './changes-list'
+import { CornerHead } from './corner-head'
+import { MapPanel } from './map-panel'
+import { AddMarkForm, ChangeMarkForm } from './mark-form'
+import { MarkTable, NoMarks } from './mark-table'
+import { Outcome } from './outcome'
+import type { CornerPageData } from './page-data'
+import type { CornerResult } from './result'
+import type { TypedPlace } from './typed-place'
+import './corner.css'
+
+interface CornerPageProps {
+  page: CornerPageData
+  result: CornerResult | null
+  lastResult: SubmissionResult<string[]> | null
+}
+
+/** One corner: map, table of marks, card, changes; beside the table the form of what is being added or changed. */
+export function CornerPage({ page, result, lastResult }: CornerPageProps) {
+  const { open, linkWith } = useOpenForm()
+  const corner = page.cut.corner
+  const closeTo = linkWith({ add: null, mark: null })
+  return (
+    <main className="corner-page">
+      <div className="corner-main">
+        <CornerHead page={page} linkWith={linkWith} />
+        {result ? <Outcome {...{ result, closeTo }} operation={page.ids.operation} /> : null}
+        <Suspense fallback={<div className="map-panel waiting" />}>
+          <MapPanel {...{ page, linkWith }} selected={open.mark} />
+        </Suspense>
+        <OpenForm {...{ page, open, closeTo, lastResult }} />
+        {page.lines.length > 0 ? (
+          <MarkTable page={page} selected={open.mark} linkTo={(mark) => linkWith({ mark, add: null })} />
+        ) : (
+          <NoMarks page={page} />
+        )}
+        <p className="basis">
+          {words.basis} {words.caution}
+        </p>
+      </div>
+      <aside className="corner-side" aria-label={`Card of ${corner.name}`}>
+        <CardNotes page={page} />
+        <ProposalsList page={page} />
+        <ChangesList page={page} />
+        <PreviousNext page={page} />
+      </aside>
+    </main>
+  )
+}
+
+export type LinkWith = (change: Record<string, string | null>) => string
+
+interface OpenState {
+  mark: string | null
+  add: boolean
+  tapped: TypedPlace | null
+}
+
+/** Which form is open stands in the address, so that it works before JavaScript and the way back closes it. */
+function useOpenForm(): { open: OpenState; linkWith: LinkWith } {
+  const [search] = useSearchParams()
+  const linkWith: LinkWith = (change) => {
+    const next = new URLSearchParams(search)
+    for (const name of ['metres', 'side', 'across', 'hand', ...Object.keys(change)]) next.delete(name)
+    for (const [name, value] of Object.entries(change)) if (value !== null) next.set(name, value)
+    return `?${next}`
+  }
+  const metres = search.get('metres')
+  const tapped: TypedPlace | null =
+    metres === null
+      ? null
+      : {
+          metres,
+          side: search.get('side') === 'after' ? 'after' : 'before',
+          across: search.get('across') ?? '0',
+          hand: search.get('hand') === 'right' ? 'right' : 'left',
+        }
+  return { open: { mark: search.get('mark'), add: search.has('add'), tapped }, linkWith }
+}
+
+function OpenForm({
+  page,
+  open,
+  closeTo,
+  lastResult,
+}: {
+  page: CornerPageData
+  open: OpenState
+  closeTo: string
+  lastResult: SubmissionResult<string[]> | null
+}) {
+  const mark = page.cut.corner.marks.find((one) => one.id === open.mark)
+  if (open.add && page.may.add)
+    return <AddMarkForm key={JSON.stringify(open.tapped)} {...{ page, closeTo, lastResult }} tapped={open.tapped} />
+  if (!mark) return null
+  const grounds: readonly Ground[] = page.show === 'both' ? GROUNDS.toReversed() : [page.show]
+  return (
+    <div className="mark-forms">
+      {grounds.map((ground) => (
+        <ChangeMarkForm
+          key={`${mark.id} ${ground} ${JSON.stringify(mark[ground]?.stored)}`}
+          {...{ page, closeTo, lastResult, mark, ground }}
+        />
+      ))}
+    </div>
+  )
+}
+
+function PreviousNext({ page }: { page: CornerPageData }) {
+  const { previous, next, tabs } = page.cut
+  const nameOf = (number: string) => tabs.find((tab) => tab.number === number)?.name
+  return (
+    <nav className="previous-next" aria-label="Corners before and after">
+      <Link className="btn" to={`../corners/${previous}`} relative="path" rel="prev">
+        <Icon name="left" /> {previous} {nameOf(previous)}
+      </Link>
+      <Link className="btn" to={`../corners/${next}`} relative="path" rel="next">
+        {next} {nameOf(next)} <Icon name="right" />
+      </Link>
+    </nav>
+  )
+}

@@ -1,0 +1,202 @@
+import { type FieldMetadata, getFormProps, type SubmissionResult, useForm } from '@conform-to/react'
+import { getZodConstraint, parseWithZod } from '@conform-to/zod/v4'
+import { Form, Link } from 'react-router'
+import { GROUNDS, type Ground, MANNERS } from '~/book/kinds'
+import type { MarkView } from '~/book/view'
+import { SelectField, TextField } from '~/components/form/field'
+import { FormErrors } from '~/components/form/form-errors'
+import { Button } from '~/components/ui/button'
+import { acrossWords, corner as words } from '~/words/corner'
+import { groundWord, mannerWord, markKind } from '~/words/kinds'
+import { addForm, changeForm, kindOfChoice, MARK_CHOICES } from './mark-forms'
+import { markName } from './mark-words'
+import type { CornerPageData } from './page-data'
+import { kmhField, placeFromTyped, seenOf, type TypedPlace, typedFrom } from './typed-place'
+
+interface FormProps {
+  page: CornerPageData
+  /** Address of the page with no form open. */
+  closeTo: string
+  lastResult: SubmissionResult<string[]> | null
+}
+
+/** Adds a mark: what happens, where. The place comes from a tap on the map or is typed. */
+export function AddMarkForm({ page, closeTo, lastResult, tapped }: FormProps & { tapped: TypedPlace | null }) {
+  const [form, fields] = useForm({
+    id: 'add-mark',
+    lastResult,
+    defaultValue: {
+      ground: page.show === 'both' ? 'real' : page.show,
+      whose: 'everyone',
+      ...(tapped ?? { side: 'before', hand: 'left' }),
+    },
+    constraint: getZodConstraint(addForm),
+    onValidate: ({ formData }) => parseWithZod(formData, { schema: addForm }),
+    shouldRevalidate: 'onInput',
+  })
+  return (
+    <Form method="post" {...getFormProps(form)} className="mark-form" preventScrollReset>
+      <h2 className="h3">Add a mark</h2>
+      <Hidden intent="add" operation={page.ids.operation} mark={page.ids.mark} condition={page.condition} />
+      <FormErrors form={form} />
+      <div className="mark-fields">
+        <SelectField field={fields.kind} label="What happens">
+          <option value="">Choose</option>
+          {MARK_CHOICES.map((choice) => {
+            const { kind, role } = kindOfChoice(choice)
+            return (
+              <option key={choice} value={choice}>
+                {markKind(kind, role)}
+              </option>
+            )
+          })}
+        </SelectField>
+        <GroundField field={fields.ground} />
+        <PlaceFields {...{ page, fields }} />
+        <DetailFields fields={fields} />
+        <SelectField field={fields.whose} label="Whose">
+          <option value="everyone">Everyone’s</option>
+          <option value="me">Mine</option>
+        </SelectField>
+      </div>
+      <Buttons closeTo={closeTo} label="Add mark" />
+    </Form>
+  )
+}
+
+/** Changes a mark's place and what goes with it, or takes it off the book. */
+export function ChangeMarkForm({
+  page,
+  closeTo,
+  lastResult,
+  mark,
+  ground,
+}: FormProps & { mark: MarkView; ground: Ground }) {
+  const place = mark[ground]
+  const [form, fields] = useForm({
+    id: `change-${mark.id}-${ground}`,
+    lastResult,
+    defaultValue: {
+      ...(place ? typedFrom(place) : { side: 'before', hand: 'left' }),
+      manner: mark.manner ?? '',
+      gear: mark.gear ?? '',
+      speed: kmhField(mark.speed),
+    },
+    constraint: getZodConstraint(changeForm),
+    onValidate: ({ formData }) => parseWithZod(formData, { schema: changeForm }),
+    shouldRevalidate: 'onInput',
+  })
+  return (
+    <div className="mark-form">
+      <Form method="post" {...getFormProps(form)} preventScrollReset>
+        <h2 className="h3">
+          {markName(mark)} <span className="muted">{groundWord(ground).toLowerCase()}</span>
+        </h2>
+        <Hidden
+          intent="change"
+          operation={page.ids.operation}
+          mark={mark.id}
+          ground={ground}
+          seen={JSON.stringify(seenOf(mark, ground))}
+        />
+        <FormErrors form={form} />
+        <div className="mark-fields">
+          <PlaceFields {...{ page, fields }} />
+          <DetailFields fields={fields} />
+        </div>
+        <Buttons
+          closeTo={closeTo}
+          label={place ? 'Save' : `Give it a place ${ground === 'sim' ? 'in the simulator' : 'on the real track'}`}
+        />
+      </Form>
+      <Form method="post" className="drop-form" preventScrollReset>
+        <Hidden intent="drop" operation={page.ids.operation} mark={mark.id} />
+        <Button look="danger" size="small">
+          Take off the book
+        </Button>
+      </Form>
+    </div>
+  )
+}
+
+/** Named values that travel with a form. */
+export function Hidden(values: Record<string, string>) {
+  return Object.entries(values).map(([name, value]) => <input key={name} type="hidden" name={name} value={value} />)
+}
+
+function Buttons({ closeTo, label }: { closeTo: string; label: string }) {
+  return (
+    <p className="mark-buttons">
+      <Button look="primary">{label}</Button>
+      <Link className="btn btn-quiet" to={closeTo} preventScrollReset>
+        Cancel
+      </Link>
+    </p>
+  )
+}
+
+type Fields<Name extends string> = Record<Name, FieldMetadata<unknown>>
+
+function GroundField({ field }: { field: FieldMetadata<unknown> }) {
+  return (
+    <SelectField field={field} label="Where">
+      {GROUNDS.map((ground) => (
+        <option key={ground} value={ground}>
+          {groundWord(ground)}
+        </option>
+      ))}
+    </SelectField>
+  )
+}
+
+function PlaceFields({ page, fields }: { page: CornerPageData; fields: Fields<keyof TypedPlace> }) {
+  const { corner, layout, car } = page.cut
+  const value = (name: keyof TypedPlace) => fields[name].value as string | undefined
+  const typed = placeFromTyped({
+    metres: value('metres'),
+    side: value('side'),
+    across: value('across'),
+    hand: value('hand'),
+  })
+  return (
+    <>
+      <TextField
+        field={fields.metres}
+        label="Metres to the datum"
+        inputMode="decimal"
+        hint={words.zero(corner.datum.words)}
+      />
+      <SelectField field={fields.side} label="Which side of it">
+        <option value="before">before</option>
+        <option value="after">after</option>
+      </SelectField>
+      <TextField
+        field={fields.across}
+        label="Metres from the middle"
+        inputMode="decimal"
+        hint={typed ? acrossWords(typed.offset, layout.roadWidth, car.width) : 'of the road, to the car’s centre'}
+      />
+      <SelectField field={fields.hand} label="To which side">
+        <option value="left">left</option>
+        <option value="right">right</option>
+      </SelectField>
+    </>
+  )
+}
+
+function DetailFields({ fields }: { fields: Fields<'manner' | 'gear' | 'speed'> }) {
+  return (
+    <>
+      <TextField field={fields.speed} label="Speed, km/h" inputMode="decimal" />
+      <TextField field={fields.gear} label="Gear" inputMode="numeric" />
+      <SelectField field={fields.manner} label="How">
+        <option value="">Not said</option>
+        {MANNERS.map((manner) => (
+          <option key={manner} value={manner}>
+            {mannerWord(manner)}
+          </option>
+        ))}
+      </SelectField>
+    </>
+  )
+}

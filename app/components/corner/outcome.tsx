@@ -1,0 +1,59 @@
+import { Form, Link } from 'react-router'
+import { Toast } from '~/components/ui/notice'
+import { Hidden } from './mark-form'
+import type { CornerResult } from './result'
+
+/** What became of the change that was just sent: done with its undo, refused, or two versions to choose from. */
+export function Outcome({ result, operation, closeTo }: { result: CornerResult; operation: string; closeTo: string }) {
+  if (result.kind === 'refused') return <Toast kind="danger">{result.words}</Toast>
+  if (result.kind === 'done')
+    return (
+      <Toast kind="done">
+        {result.words}
+        {result.undo ? (
+          <Form method="post" preventScrollReset className="toast-form">
+            <Hidden intent="undo" operation={operation} change={result.undo} />
+            <button type="submit">Undo</button>
+          </Form>
+        ) : null}
+      </Toast>
+    )
+  return <Conflict {...{ result, operation, closeTo }} />
+}
+
+function Conflict({
+  result,
+  operation,
+  closeTo,
+}: {
+  result: Extract<CornerResult, { kind: 'conflict' }>
+  operation: string
+  closeTo: string
+}) {
+  return (
+    <div role="alert" className="conflict">
+      <p>
+        <b>{result.words}</b>
+      </p>
+      <dl>
+        <dt>Theirs</dt>
+        <dd>{result.theirs}</dd>
+        <dd>
+          <Link className="btn" to={closeTo} replace preventScrollReset>
+            Keep theirs
+          </Link>
+        </dd>
+        <dt>Yours</dt>
+        <dd>{result.mine}</dd>
+        <dd>
+          <Form method="post" preventScrollReset>
+            <Hidden {...result.again} operation={operation} />
+            <button type="submit" className="btn">
+              Keep yours
+            </button>
+          </Form>
+        </dd>
+      </dl>
+    </div>
+  )
+}

@@ -1,0 +1,108 @@
+import { parseWithZod } from '@conform-to/zod/v4'
+import { data } from 'react-router'
+import { v7 } from 'uuid'
+import type { Actor } from '~/book/actions'
+import { type CornerCut, cornerOf } from '~/book/cuts'
+import type { OperationId } from '~/book/ids'
+import { operationOf } from '~/book/intents'
+import { lookAt } from '~/book/look'
+import { CornerPage } from '~/components/corner/corner-page'
+import { type CornerIntent, cornerForm } from '~/components/corner/mark-forms'
+import { markIntent } from '~/components/corner/mark-intent'
+import { cornerPageData } from '~/components/corner/page-data'
+import { type CornerResult, intentResult, plainResult } from '~/components/corner/result'
+import { applyOperation } from '~/db/apply.server'
+import type { Db } from '~/db/database'
+import { decideProposal, listProposals } from '~/db/proposals.server'
+import { readChanges } from '~/db/read-changes.server'
+import { readNames } from '~/db/read-team.server'
+import { undoOperation } from '~/db/undo.server'
+import { bookContext } from '~/middleware/book.server'
+import { dbContext } from '~/middleware/context'
+import { layOutGeometry } from '~/middleware/lay-out-geometry.server'
+import { refusal } from '~/middleware/refusal.server'
+import { teamContext } from '~/middleware/team.server'
+import { makeLapFrame } from '~/track/lap-frame'
+import { along } from '~/track/units'
+import { corner as words } from '~/words/corner'
+import { pageTitle } from '~/words/titles'
+import type { Route } from './+types/corner'
+
+export const meta: Route.MetaFunction = ({ loaderData }) => {
+  if (!loaderData) return []
+  const { corner, book } = loaderData.cut
+  return [{ title: pageTitle(`${corner.number} ${corner.name}`, book.name) }]
+}
+
+export async function loader({ context, params, url }: Route.LoaderArgs) {
+  const view = context.get(bookContext)
+  const cut = cornerOf(view, params.number)
+  if (!cut) throw refusal('not-found')
+  const db = context.get(dbContext)
+  const { actor, team } = context.get(teamContext)
+  const [frame, names, changes, proposals] = await Promise.all([
+    layOutGeometry(context, actor, view.layout),
+    readNames(db, actor),
+    readChanges(db, actor, view.book.id),
+    listProposals(db, actor, { kind: 'book', id: view.book.id }),
+  ])
+  return cornerPageData({
+    team: team.slug,
+    cut,
+    actor,
+    frame,
+    names,
+    changes,
+    proposals,
+    ...lookAt(view.conditions, {
+      condition: url.searchParams.get('condition'),
+      show: url.searchParams.get('show'),
+    }),
+    ids: { operation: v7(), mark: v7() },
+  })
+}
+
+export async function action({ request, context, params }: Route.ActionArgs) {
+  const cut = cornerOf(context.get(bookContext), params.number)
+  if (!cut) throw refusal('not-found')
+  const form = await request.formData()
+  const submission = parseWithZod(form, { schema: cornerForm })
+  if (submission.status !== 'success') return data({ result: null, lastResult: submission.reply() }, 400)
+  const sent = Object.fromEntries([...form].map(([name, value]) => [name, String(value)]))
+  const { actor } = context.get(teamContext)
+  const result = await perform(context.get(dbContext), actor, cut, submission.value, sent)
+  return data({ result, lastResult: null }, STATUS[result.kind])
+}
+
+const STATUS: Record<CornerResult['kind'], number> = { done: 200, refused: 403, conflict: 409 }
+
+async function perform(
+  db: Db,
+  actor: Extract<Actor, { kind: 'person' }>,
+  cut: CornerCut,
+  form: CornerIntent,
+  sent: Record<string, string>,
+): Promise<CornerResult> {
+  const scope = { kind: 'book', id: cut.book.id } as const
+  if (form.intent === 'undo') {
+    const outcome = await undoOperation(db, actor, scope, form.change as OperationId)
+    return plainResult(outcome, words.undone, words.undoConflict)
+  }
+  if (form.intent === 'decide') {
+    const outcome = await decideProposal(db, actor, form.proposal as OperationId, form.verdict)
+    return plainResult(outcome, form.verdict === 'accept' ? words.accepted : words.declined, words.undoConflict)
+  }
+  const { length, startAlong, reversed } = cut.layout
+  const frame = makeLapFrame({ length, startAlong: along(startAlong), reversed })
+  const intent = markIntent(form, actor.person)
+  const making = { id: form.operation as OperationId, madeAt: new Date().toISOString(), scope }
+  const operation = operationOf(intent, making, cut.corner, frame)
+  const outcome = operation ? await applyOperation(db, actor, operation) : ({ kind: 'nothing', rev: 0 } as const)
+  return intentResult(cut, intent, operation, outcome, sent)
+}
+
+export default function Corner({ loaderData, actionData }: Route.ComponentProps) {
+  return (
+    <CornerPage page={loaderData} result={actionData?.result ?? null} lastResult={actionData?.lastResult ?? null} />
+  )
+}
