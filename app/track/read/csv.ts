@@ -1,8 +1,7 @@
 import { makePlane } from '~/track/plane'
 import { type Columns, columnsOf } from '~/track/read/csv-columns'
 import { CsvRows, type Row } from '~/track/read/csv-table'
-import type { Reading } from '~/track/read/geojson'
-import { decimalCommas, heightsLeftOut, tooManyPositions } from '~/track/read/gpx'
+import { decimalCommas, heightsLeftOut, tooManyPositions } from '~/track/read/notes'
 import {
   coordinateFits,
   coordinateProblem,
@@ -12,8 +11,8 @@ import {
   instant,
   numberProblem,
 } from '~/track/read/numbers'
-import { mostPositions, Points } from '~/track/read/points'
-import { inMetres, type Problem, problem, quoted, several } from '~/track/read/problems'
+import { mostPositions, Points, type Reading } from '~/track/read/points'
+import { inMetres, type Problem, problem, quoted } from '~/track/read/problems'
 import type { LngLat } from '~/track/units'
 
 const delimiters = [',', ';', '\t', '|']

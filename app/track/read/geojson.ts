@@ -1,13 +1,9 @@
 import { type Node, type Run, readNode } from '~/track/read/geojson-nodes'
 import { JsonCursor, jsonSizeProblem } from '~/track/read/json'
+import { extraValues, heightsLeftOut, leftOut } from '~/track/read/notes'
 import { coordinateFits, coordinateProblem } from '~/track/read/numbers'
-import { type Content, type Line, Points, tidyName } from '~/track/read/points'
+import { type Content, type Line, Points, type Reading, tidyName } from '~/track/read/points'
 import { type Problem, problem, quoted, several } from '~/track/read/problems'
-
-/** What reading one format comes to. */
-export type Reading =
-  | { readonly ok: true; readonly content: Content; readonly warnings: readonly Problem[] }
-  | { readonly ok: false; readonly problems: readonly Problem[] }
 
 const geometryLevels: ReadonlyMap<string, number> = new Map([
   ['Point', 0],
@@ -70,12 +66,12 @@ class Collector {
     const at = (what: string, i: number) => (where === '' ? `${what} ${i + 1}` : `${where}, ${what} ${i + 1}`)
     if (node.type === 'FeatureCollection') {
       if (!node.features) this.problem = shapeProblem('A FeatureCollection needs a list of features.', where)
-      node.features?.forEach((feature, i) => this.take(feature, at('feature', i)))
+      for (const [i, feature] of (node.features ?? []).entries()) this.take(feature, at('feature', i))
     } else if (node.type === 'Feature') {
       if (node.geometry) this.take(node.geometry, where, node.name)
     } else if (node.type === 'GeometryCollection') {
       if (!node.geometries) this.problem = shapeProblem('A GeometryCollection needs a list of geometries.', where)
-      node.geometries?.forEach((geometry, i) => this.take(geometry, at('geometry', i), name))
+      for (const [i, geometry] of (node.geometries ?? []).entries()) this.take(geometry, at('geometry', i), name)
     } else this.takeGeometry(node, where, tidyName(name ?? node.name))
   }
 
@@ -200,9 +196,7 @@ class Collector {
   private leftOut(lines: readonly Line[]): Problem[] {
     const found: Problem[] = []
     if (this.pointCount > 0) {
-      found.push(
-        problem('points-ignored', `The file also holds ${several(this.pointCount, 'point')}. They are left out.`),
-      )
+      found.push(problem('points-ignored', leftOut(this.pointCount, 'point')))
     }
     if (lines === this.lines && this.rings.length > 0) {
       const says = `The file also holds ${several(this.rings.length, 'area')}. Only its lines are read.`
@@ -213,12 +207,10 @@ class Collector {
       found.push(problem('inner-rings-left-out', says))
     }
     if (this.extra > 0) {
-      const says = `${several(this.extra, 'position has', 'positions have')} more than three values. Those past the height are left out.`
-      found.push(problem('extra-coordinate', says))
+      found.push(extraValues(this.extra))
     }
     if (this.heightless > 0) {
-      const says = `${several(this.heightless, 'height')} cannot be read as a number. They are left out.`
-      found.push(problem('heights-left-out', says))
+      found.push(heightsLeftOut(this.heightless))
     }
     return found
   }

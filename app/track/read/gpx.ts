@@ -1,4 +1,4 @@
-import type { Reading } from '~/track/read/geojson'
+import { decimalCommas, heightsLeftOut, leftOut, tooManyPositions } from '~/track/read/notes'
 import {
   coordinateFits,
   coordinateProblem,
@@ -7,14 +7,14 @@ import {
   instant,
   numberProblem,
 } from '~/track/read/numbers'
-import { type Line, mostPositions, Points, tidyName } from '~/track/read/points'
-import { count, type Problem, problem, several } from '~/track/read/problems'
+import { type Line, mostPositions, Points, type Reading, tidyName } from '~/track/read/points'
+import { type Problem, problem, several } from '~/track/read/problems'
 import type { XmlPlace, XmlReader } from '~/track/read/xml'
 
 export const gpxNamespaces = ['http://www.topografix.com/GPX/1/1', 'http://www.topografix.com/GPX/1/0']
 
 /** Elements whose content is not looked at. */
-const leftOut = new Set(['extensions', 'link', 'author', 'copyright', 'bounds'])
+const skipped = new Set(['extensions', 'link', 'author', 'copyright', 'bounds'])
 
 /**
  * Reads GPX 1.0 and 1.1: the segments of its tracks, or its routes where it has no track. Points without a time or a
@@ -41,7 +41,7 @@ export class GpxReader implements XmlReader {
   constructor(private readonly place: XmlPlace) {}
 
   open(name: string, attributes: Readonly<Record<string, string>>): 'skip' | undefined {
-    if (leftOut.has(name)) return 'skip'
+    if (skipped.has(name)) return 'skip'
     this.path.push(name)
     this.heard = ''
     if (name === 'trk' || name === 'rte') this.lineName = undefined
@@ -84,8 +84,8 @@ export class GpxReader implements XmlReader {
   private beginPoint(attributes: Readonly<Record<string, string>>): void {
     this.height = Number.NaN
     this.time = Number.NaN
-    this.lat = this.coordinate(attributes['lat'] ?? '', 'latitude')
-    this.lon = this.coordinate(attributes['lon'] ?? '', 'longitude')
+    this.lat = this.coordinate(attributes.lat ?? '', 'latitude')
+    this.lon = this.coordinate(attributes.lon ?? '', 'longitude')
     if (!coordinateFits(this.lon, this.lat, true)) {
       this.place.stop(coordinateProblem(this.lon, this.lat, this.place.where(), true))
     }
@@ -116,9 +116,7 @@ export class GpxReader implements XmlReader {
     if (lines.length === 0) return { ok: false, problems: [this.noLine()] }
     const warnings: Problem[] = []
     if (this.wayPoints > 0) {
-      warnings.push(
-        problem('points-ignored', `The file also holds ${several(this.wayPoints, 'waypoint')}. They are left out.`),
-      )
+      warnings.push(problem('points-ignored', leftOut(this.wayPoints, 'waypoint')))
     }
     if (lines === this.segments && this.routes.length > 0) {
       const says = `The file also holds ${several(this.routes.length, 'route')}. Only its tracks are read.`
@@ -145,16 +143,3 @@ export class GpxReader implements XmlReader {
     return problem('no-line', says)
   }
 }
-
-export const heightsLeftOut = (number: number) =>
-  problem('heights-left-out', `${several(number, 'height')} cannot be read as a number. They are left out.`)
-
-export const decimalCommas = () =>
-  problem('decimal-comma', 'Numbers are written with a decimal comma. They are read with a point.')
-
-export const tooManyPositions = (where: string) =>
-  problem(
-    'too-many-positions',
-    `The file holds more than ${count(mostPositions)} positions. Save one lap and bring that.`,
-    where,
-  )

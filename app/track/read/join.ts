@@ -50,7 +50,7 @@ const exit = (lines: readonly Line[], { piece, backwards }: Link) =>
 /**
  * Joins the pieces of a drawing end to end: from the longest piece on, always to the nearest free end within 60 m (of
  * those within a metre of the nearest the one straightest ahead), until the ring closes; where the chain ends, it goes on
- * from its other end. Pieces left over are listed.
+ * from its other end. The line runs the way that most of its length is drawn. Pieces left over are listed.
  * @param wanted numbers of the pieces to join, from 1; all of them where none are given
  */
 export function joinPieces(content: Content, wanted?: readonly number[]): Joined | Problem {
@@ -105,13 +105,15 @@ function chainOf(flat: Flat, lines: readonly Line[], lengths: readonly number[],
     } else if (turned) break
     else {
       turned = true
-      chain = chain.toReversed().map(({ piece, backwards }) => ({ piece, backwards: !backwards }))
+      chain = turnedRound(chain)
     }
   }
-  // A chain that went on from its other end is turned back, so that the longest piece keeps its direction.
-  const first = chain.find(({ piece }) => piece === longest)!
-  return first.backwards ? chain.toReversed().map(({ piece, backwards }) => ({ piece, backwards: !backwards })) : chain
+  const against = chain.reduce((sum, { piece, backwards }) => sum + (backwards ? 1 : -1) * lengths[piece]!, 0)
+  return against > 0 ? turnedRound(chain) : chain
 }
+
+const turnedRound = (chain: readonly Link[]): Link[] =>
+  chain.toReversed().map(({ piece, backwards }) => ({ piece, backwards: !backwards }))
 
 /** The free piece end nearest to where a link comes out; of those as near as that the one straightest ahead. */
 function nearest(flat: Flat, lines: readonly Line[], free: ReadonlySet<number>, from: Link): Link | undefined {

@@ -93,7 +93,10 @@ export class JsonCursor {
   members(each: (key: string) => void): void {
     this.list(openBrace, closeBrace, () => {
       const key = this.string()
-      if (this.peek() !== colon) return this.fail('A colon is missing after a name')
+      if (this.peek() !== colon) {
+        this.fail('A colon is missing after a name')
+        return
+      }
       this.at++
       each(key)
     })
@@ -105,7 +108,10 @@ export class JsonCursor {
   }
 
   private list(open: number, close: number, each: () => void): void {
-    if (this.peek() !== open) return this.fail('A value is missing')
+    if (this.peek() !== open) {
+      this.fail('A value is missing')
+      return
+    }
     this.at++
     if (this.peek() === close) {
       this.at++
@@ -172,17 +178,29 @@ export class JsonCursor {
     if (this.peek() === minus) this.at++
     const leadingZero = this.text.charCodeAt(this.at) === 48
     const start = this.at
-    if (!this.digits()) return this.failNumber()
-    if (leadingZero && this.at > start + 1) return this.failNumber()
+    if (!this.digits()) {
+      this.failNumber()
+      return
+    }
+    if (leadingZero && this.at > start + 1) {
+      this.failNumber()
+      return
+    }
     if (this.text.charCodeAt(this.at) === 46) {
       this.at++
-      if (!this.digits()) return this.failNumber()
+      if (!this.digits()) {
+        this.failNumber()
+        return
+      }
     }
     if ((this.text.charCodeAt(this.at) | 32) === 101) {
       this.at++
       const sign = this.text.charCodeAt(this.at)
       if (sign === 43 || sign === minus) this.at++
-      if (!this.digits()) return this.failNumber()
+      if (!this.digits()) {
+        this.failNumber()
+        return
+      }
     }
     const next = this.text.charCodeAt(this.at) | 32
     if (next >= 97 && next <= 122) this.failNumber()

@@ -1,4 +1,4 @@
-import { tooManyPositions } from '~/track/read/gpx'
+import { tooManyPositions } from '~/track/read/notes'
 import { coordinateFits, coordinateProblem, decimal, numberProblem } from '~/track/read/numbers'
 import { mostPositions, type Points } from '~/track/read/points'
 import { type Problem, problem, quoted } from '~/track/read/problems'

@@ -1,8 +1,7 @@
-import type { Reading } from '~/track/read/geojson'
-import { heightsLeftOut, tooManyPositions } from '~/track/read/gpx'
 import { readTuples } from '~/track/read/kml-coordinates'
+import { extraValues, heightsLeftOut, leftOut, tooManyPositions } from '~/track/read/notes'
 import { coordinateFits, coordinateProblem, decimal, instant, numberProblem } from '~/track/read/numbers'
-import { type Line, mostPositions, Points, tidyName } from '~/track/read/points'
+import { type Line, mostPositions, Points, type Reading, tidyName } from '~/track/read/points'
 import { type Problem, problem, several } from '~/track/read/problems'
 import type { XmlPlace, XmlReader } from '~/track/read/xml'
 
@@ -14,7 +13,7 @@ export const kmlNamespaces = [
   'http://earth.google.com/kml/2.0',
 ]
 
-const leftOut = new Set(['ExtendedData', 'Style', 'StyleMap', 'description', 'Schema', 'LookAt', 'Camera', 'Region'])
+const skipped = new Set(['ExtendedData', 'Style', 'StyleMap', 'description', 'Schema', 'LookAt', 'Camera', 'Region'])
 const geometries = new Set(['LineString', 'LinearRing', 'Track', 'Point'])
 const heard = new Set(['name', 'coordinates', 'coord', 'when', 'altitudeMode'])
 
@@ -47,7 +46,7 @@ export class KmlReader implements XmlReader {
   constructor(private readonly place: XmlPlace) {}
 
   open(name: string): 'skip' | undefined {
-    if (leftOut.has(name)) return 'skip'
+    if (skipped.has(name)) return 'skip'
     this.path.push(name)
     this.said = ''
     if (name === 'Placemark') this.name = undefined
@@ -92,13 +91,25 @@ export class KmlReader implements XmlReader {
 
   private takeCoord(text: string): void {
     const time = this.coords++
-    if (text === '') return this.cutTrack()
+    if (text === '') {
+      this.cutTrack()
+      return
+    }
     const parts = text.split(/\s+/, 5)
     const where = this.place.where()
     const [lon, lat] = [decimal(parts[0] ?? ''), decimal(parts[1] ?? '')]
-    if (Number.isNaN(lon)) return this.place.stop(numberProblem(parts[0] ?? '', 'longitude', where))
-    if (Number.isNaN(lat)) return this.place.stop(numberProblem(parts[1] ?? '', 'latitude', where))
-    if (!coordinateFits(lon, lat)) return this.place.stop(coordinateProblem(lon, lat, where))
+    if (Number.isNaN(lon)) {
+      this.place.stop(numberProblem(parts[0] ?? '', 'longitude', where))
+      return
+    }
+    if (Number.isNaN(lat)) {
+      this.place.stop(numberProblem(parts[1] ?? '', 'latitude', where))
+      return
+    }
+    if (!coordinateFits(lon, lat)) {
+      this.place.stop(coordinateProblem(lon, lat, where))
+      return
+    }
     const height = decimal(parts[2] ?? '')
     if (Number.isNaN(height) && parts[2]) this.badHeights++
     this.points.push(lon, lat, height, time)
@@ -149,9 +160,7 @@ export class KmlReader implements XmlReader {
     if (!lines) return { ok: false, problems: [this.noLine()] }
     const warnings: Problem[] = []
     if (this.pointCount > 0) {
-      warnings.push(
-        problem('points-ignored', `The file also holds ${several(this.pointCount, 'point')}. They are left out.`),
-      )
+      warnings.push(problem('points-ignored', leftOut(this.pointCount, 'point')))
     }
     if (lines !== this.rings && this.rings.length > 0) {
       const says = `The file also holds ${several(this.rings.length, 'area')}. Only its lines are read.`
@@ -173,7 +182,7 @@ export class KmlReader implements XmlReader {
   private repairs(): Problem[] {
     const found: Problem[] = []
     if (this.clamped > 0) {
-      const says = `${several(this.clamped, 'height')} are left out: the file lays the line on the ground. Set its altitude mode to absolute to keep them.`
+      const says = `${several(this.clamped, 'height is', 'heights are')} left out: the file lays the line on the ground. Set its altitude mode to absolute to keep them.`
       found.push(problem('heights-left-out', says))
     }
     if (this.badHeights > 0) found.push(heightsLeftOut(this.badHeights))
@@ -186,8 +195,7 @@ export class KmlReader implements XmlReader {
       )
     }
     if (this.extra > 0) {
-      const says = `${several(this.extra, 'position has', 'positions have')} a fourth value. It is left out.`
-      found.push(problem('extra-coordinate', says))
+      found.push(extraValues(this.extra))
     }
     return found
   }

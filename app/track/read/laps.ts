@@ -97,11 +97,13 @@ function measure(points: Points, flat: Flat, round: Round, index: number): Found
   return {
     index,
     lengthMetres,
-    ...(timed && { seconds: seconds(took), gapSeconds: seconds(gap) }),
+    ...(timed && { seconds: seconds(thousandths(took)), gapSeconds: seconds(thousandths(gap)) }),
     round,
     jumps,
   }
 }
+
+const thousandths = (value: number) => Math.round(value * 1000) / 1000
 
 function pick(
   content: Content,

@@ -1,3 +1,5 @@
+import type { Problem } from '~/track/read/problems'
+
 /** Positions a file may hold before it is refused. */
 export const mostPositions = 1_000_000
 
@@ -66,6 +68,11 @@ export interface Content {
   readonly name?: string
   readonly heightDatum?: HeightDatum
 }
+
+/** What reading one format comes to. */
+export type Reading =
+  | { readonly ok: true; readonly content: Content; readonly warnings: readonly Problem[] }
+  | { readonly ok: false; readonly problems: readonly Problem[] }
 
 /** Longest layout name kept. */
 const longestName = 120

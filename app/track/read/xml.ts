@@ -99,12 +99,16 @@ class Walk {
     if (this.found) return
     if (++this.depth > deepest) {
       const says = `The elements are nested more than ${deepest} deep. Save the line alone.`
-      return this.stop(problem('xml-too-deep', says, this.where()))
+      this.stop(problem('xml-too-deep', says, this.where()))
+      return
     }
     if (this.depth >= this.skippedFrom) return
     this.bind(attributes)
     const [prefix, local] = splitName(name)
-    if (!this.reader) return this.begin(prefix, local)
+    if (!this.reader) {
+      this.begin(prefix, local)
+      return
+    }
     const uri = this.bound.get(prefix)
     const foreign = uri !== undefined && !this.namespaces.has(uri)
     if (foreign || this.reader.open(local, attributes) === 'skip') this.skippedFrom = this.depth
@@ -114,7 +118,10 @@ class Walk {
   private begin(prefix: string, local: string): void {
     const home = this.bound.get(prefix)
     const reader = this.readerFor(local, { where: this.where, stop: this.stop })
-    if ('code' in reader) return this.stop(reader)
+    if ('code' in reader) {
+      this.stop(reader)
+      return
+    }
     this.reader = reader
     if (home !== undefined) this.namespaces.add(home)
   }
