@@ -1,0 +1,24 @@
+import { z } from 'zod'
+
+interface Limits {
+  least: number
+  most: number
+  missing: string
+  /** What to say of text that is no number. */
+  wrong: string
+  /** What to say of a number outside the limits. */
+  outside: string
+}
+
+/** A number typed as text: digits with a decimal point or comma, blanks around it. Gives the number. */
+export function figure({ least, most, missing, wrong, outside }: Limits) {
+  return z
+    .string(missing)
+    .trim()
+    .regex(/^[+\-−]?\d{1,9}(?:[.,]\d{0,9})?$/, wrong)
+    .transform((text) => Number(text.replace(',', '.').replace('−', '-')))
+    .pipe(z.number().min(least, outside).max(most, outside))
+}
+
+/** A name as people give it: not empty, at most 80 letters. */
+export const nameField = (missing: string) => z.string(missing).trim().min(1, missing).max(80, 'Up to 80 letters.')
