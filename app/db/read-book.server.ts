@@ -2,31 +2,14 @@ import { and, asc, eq, sql } from 'drizzle-orm'
 import type { Actor } from '~/book/actions'
 import { assembleBookView } from '~/book/assemble'
 import type { BookId, LayoutId } from '~/book/ids'
-import type { Ground } from '~/book/kinds'
-import type { Placement } from '~/book/place'
-import type { BookRows, CardRow, CornerRow, LandmarkRow, MarkRow, StretchRow } from '~/book/rows'
+import type { BookRows, CardRow, CornerRow, MarkRow } from '~/book/rows'
 import type { BookView } from '~/book/view'
 import { along, metres, metresPerSecond } from '~/track/units'
 import type { Db } from './database'
 import { ownTeam } from './own-team'
-import { type PlacementRow, placeColumns, placeFrom, placementColumns, placementFrom } from './placing'
-import {
-  books,
-  cards,
-  cars,
-  circuits,
-  conditions,
-  corners,
-  findings,
-  landmarkPlacements,
-  landmarks,
-  layouts,
-  marks,
-  places,
-  stretches,
-  stretchPlacements,
-  ties,
-} from './schema'
+import { placeColumns, placeFrom } from './placing'
+import { readLandmarks, readStretches } from './read-landmarks.server'
+import { books, cards, cars, circuits, conditions, corners, findings, layouts, marks, places, ties } from './schema'
 
 /**
  * The working book as it is now, or null where the actor's team has none of this name. Seven reads in one snapshot, however many
@@ -214,56 +197,4 @@ async function readFindings(db: Db, actor: Actor, book: BookId): Promise<BookRow
     .where(and(ownTeam(actor, findings.teamId), eq(findings.bookId, book)))
     .orderBy(asc(findings.foundAt), asc(findings.id))
   return rows.map((row) => ({ ...row, at: row.at.toISOString() }))
-}
-
-type Joined = { [Column in keyof PlacementRow]: PlacementRow[Column] | null } & { ground: Ground | null }
-
-/** Things of a layout with the placement of each ground, from one row per thing and ground; the join finds none for some. */
-function withPlacements<Thing extends { id: string }>(rows: readonly { thing: Thing; placement: Joined | null }[]) {
-  const found = new Map<string, Thing & Record<Ground, Placement | null>>()
-  for (const { thing, placement } of rows) {
-    const known = found.get(thing.id) ?? { ...thing, real: null, sim: null }
-    found.set(thing.id, known)
-    if (!placement || placement.ground === null || placement.along === null) continue
-    Object.assign(known, { [placement.ground]: placementFrom({ ...placement, along: placement.along }) })
-  }
-  return [...found.values()]
-}
-
-/** The live landmarks of a layout. */
-export async function readLandmarks(db: Db, actor: Actor, layout: LayoutId): Promise<LandmarkRow[]> {
-  const rows = await db
-    .select({
-      thing: {
-        id: landmarks.id,
-        kind: landmarks.kind,
-        name: landmarks.name,
-        text: landmarks.text,
-        corner: landmarks.cornerId,
-        height: landmarks.height,
-      },
-      placement: placementColumns(landmarkPlacements),
-    })
-    .from(landmarks)
-    .leftJoin(
-      landmarkPlacements,
-      and(eq(landmarkPlacements.teamId, landmarks.teamId), eq(landmarkPlacements.landmarkId, landmarks.id)),
-    )
-    .where(and(ownTeam(actor, landmarks.teamId), eq(landmarks.layoutId, layout), eq(landmarks.state, 'live')))
-  return withPlacements(rows).map((row) => ({ ...row, height: row.height === null ? null : metres(row.height) }))
-}
-
-async function readStretches(db: Db, actor: Actor, layout: LayoutId): Promise<StretchRow[]> {
-  const rows = await db
-    .select({
-      thing: { id: stretches.id, kind: stretches.kind, name: stretches.name },
-      placement: placementColumns(stretchPlacements),
-    })
-    .from(stretches)
-    .leftJoin(
-      stretchPlacements,
-      and(eq(stretchPlacements.teamId, stretches.teamId), eq(stretchPlacements.stretchId, stretches.id)),
-    )
-    .where(and(ownTeam(actor, stretches.teamId), eq(stretches.layoutId, layout), eq(stretches.state, 'live')))
-  return withPlacements(rows)
 }

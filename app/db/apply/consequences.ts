@@ -1,13 +1,12 @@
-import { and, asc, eq } from 'drizzle-orm'
+import { and, asc, eq, isNull } from 'drizzle-orm'
 import type { BookId, CardId, CornerId, LandmarkId, TeamId } from '~/book/ids'
-import type { Ground } from '~/book/kinds'
 import { type Json, OPERATION_VERSION, type Operation, type Scope } from '~/book/operation'
 import type { Place, Placement } from '~/book/place'
-import { resolveTie } from '~/book/ties'
 import type { Db } from '../database'
 import { placeColumns, placeFrom } from '../placing'
-import { books, marks, places, ties } from '../schema'
+import { books, cards, marks, places, ties } from '../schema'
 import { newId } from './new-id'
+import { resolvedPlace } from './resolve'
 import { keyOf, type LockedScope } from './scopes'
 import type { Values } from './values'
 
@@ -42,26 +41,23 @@ export async function freeTies(db: Db, team: TeamId, drop: Operation, landmark: 
     const scope: Scope = { kind: 'book', id: book }
     const locked = scopes.get(keyOf(scope))
     if (!locked) return []
-    const from = placeFrom(row)
-    const to = freed(from, landmark[row.ground] as unknown as Placement | null, locked)
-    const set = { [row.ground satisfies Ground]: { from: from as unknown as Json, to: to as unknown as Json } }
+    const from = resolvedPlace(placeFrom(row), landmark[row.ground] as unknown as Placement | null, locked)
+    const to: Place = { ...from, tie: from.tie && { ...from.tie, landmarkId: null, along: null } }
+    const set = { [row.ground]: { from: from as unknown as Json, to: to as unknown as Json } }
     return [followUp(drop, scope, { kind: 'mark', id: mark }, set)]
   })
 }
 
-function freed(place: Place, placement: Placement | null, { length, reversed, carLength }: LockedScope): Place {
-  const at = resolveTie(place, placement, { length, reversed, carLength: carLength ?? 0 })
-  return { ...place, ...at, tie: place.tie && { ...place.tie, landmarkId: null, along: null } } as Place
-}
-
-/** What making a corner does: every book of its layout gets a card for it. */
+/** What a corner that comes to life does: every book of its layout that has no card for it gets one. */
 export async function cardsForCorner(db: Db, team: TeamId, making: Operation, layout: LockedScope) {
+  const corner = making.target.id as CornerId
   const rows = await db
     .select({ id: books.id })
     .from(books)
-    .where(and(eq(books.teamId, team), eq(books.layoutId, layout.layout)))
+    .leftJoin(cards, and(eq(cards.teamId, books.teamId), eq(cards.bookId, books.id), eq(cards.cornerId, corner)))
+    .where(and(eq(books.teamId, team), eq(books.layoutId, layout.layout), isNull(cards.id)))
     .orderBy(asc(books.id))
-  return rows.map(({ id }) => makeCard(id, making.target.id as CornerId, making.madeAt))
+  return rows.map(({ id }) => makeCard(id, corner, making.madeAt))
 }
 
 /** The operation that makes a book's card of a corner. */

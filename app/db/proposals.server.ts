@@ -1,0 +1,112 @@
+import { and, asc, eq } from 'drizzle-orm'
+import type { Actor } from '~/book/actions'
+import type { OperationId, PersonId } from '~/book/ids'
+import { may } from '~/book/may'
+import type { Operation, Outcome, Scope } from '~/book/operation'
+import { applyAll } from './apply.server'
+import type { Db } from './database'
+import { ownTeam, personOf } from './own-team'
+import { operations } from './schema'
+
+/** An operation that waits for a coach. */
+export interface Proposal {
+  id: OperationId
+  by: PersonId | null
+  operation: Operation
+  batch: string | null
+  /** Instant at which it came in, ISO 8601. */
+  at: string
+}
+
+/** What waits for a coach, of one scope or of the whole team, oldest first. */
+export async function listProposals(db: Db, actor: Actor, scope: Scope | null): Promise<Proposal[]> {
+  const inScope = scope && (scope.kind === 'book' ? eq(operations.bookId, scope.id) : eq(operations.layoutId, scope.id))
+  const rows = await db
+    .select({
+      id: operations.id,
+      by: operations.personId,
+      operation: operations.body,
+      batch: operations.batch,
+      at: operations.createdAt,
+    })
+    .from(operations)
+    .where(and(ownTeam(actor, operations.teamId), eq(operations.status, 'proposed'), inScope ?? undefined))
+    .orderBy(asc(operations.createdAt), asc(operations.id))
+  return rows.map((row) => ({ ...row, at: row.at.toISOString() }))
+}
+
+/**
+ * A coach's answer to a proposal, and to all that was proposed together with it. An accepted one is held against what is now: where
+ * that has changed since, the answer is the conflict and the proposal still waits.
+ */
+export async function decideProposal(
+  db: Db,
+  actor: Actor,
+  id: OperationId,
+  decision: 'accept' | 'decline',
+): Promise<Outcome> {
+  const answer = may(actor, 'proposal.decide')
+  if (!answer.ok) return { kind: 'refused', reason: answer.reason }
+  return db.transaction(async (tx) => {
+    const proposals = await lockProposals(tx, actor, id)
+    const first = proposals[0]
+    if (!first) return { kind: 'not-found' }
+    const outcome = decision === 'accept' ? await accept(tx, actor, proposals) : declined
+    if (outcome.kind === 'applied' || outcome.kind === 'nothing')
+      await settle(tx, actor, proposals, decision === 'accept' ? 'accepted' : 'declined')
+    return outcome
+  })
+}
+
+const declined: Outcome = { kind: 'nothing', rev: 0 }
+
+interface Waiting {
+  id: OperationId
+  by: PersonId | null
+  operation: Operation
+  batch: string | null
+}
+
+async function lockProposals(db: Db, actor: Actor, id: OperationId): Promise<Waiting[]> {
+  const waiting = { id: operations.id, by: operations.personId, operation: operations.body, batch: operations.batch }
+  const isOpen = and(ownTeam(actor, operations.teamId), eq(operations.status, 'proposed'))
+  const [asked] = await db
+    .select(waiting)
+    .from(operations)
+    .where(and(isOpen, eq(operations.id, id)))
+    .for('update')
+  if (!asked?.batch) return asked ? [asked] : []
+  return db
+    .select(waiting)
+    .from(operations)
+    .where(and(isOpen, eq(operations.batch, asked.batch)))
+    .orderBy(asc(operations.createdAt), asc(operations.id))
+    .for('update')
+}
+
+async function accept(db: Db, actor: Actor, proposals: readonly Waiting[]): Promise<Outcome> {
+  const [first] = proposals
+  const manner = {
+    by: first?.by ?? null,
+    acceptedBy: personOf(actor),
+    asked: true,
+    propose: false,
+    batch: first?.batch ?? null,
+  }
+  const done = await applyAll(
+    db,
+    actor,
+    proposals.map(({ operation }) => operation),
+    manner,
+  )
+  if (done.kind === 'stopped') return done.outcome
+  return done.outcomes.find(({ kind }) => kind === 'applied') ?? done.outcomes[0] ?? declined
+}
+
+async function settle(db: Db, actor: Actor, proposals: readonly Waiting[], status: 'accepted' | 'declined') {
+  for (const { id } of proposals)
+    await db
+      .update(operations)
+      .set({ status, decidedBy: personOf(actor), decidedAt: new Date() })
+      .where(and(ownTeam(actor, operations.teamId), eq(operations.id, id)))
+}
