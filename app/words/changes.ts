@@ -1,0 +1,112 @@
+import type { Deed, ToldChange } from '~/book/changes'
+import type { Ground, Manner } from '~/book/kinds'
+import type { Json } from '~/book/operation'
+import { type Metres, metresPerSecond } from '~/track/units'
+import { mannerWord, markKind } from './kinds'
+import { formatGear, formatMetres, formatNumber, formatSpeed } from './measures'
+
+/** A change in words, without its corner and without who made it: "Build to moved 9 m sooner on the real track". */
+export function changeWords({ thing, what, reason, more }: ToldChange): string {
+  const said = `${thingWords(thing)} ${deedWords(what)}`.trim()
+  const why = reason ? `: ${reason}` : ''
+  return `${said}${why}${more > 0 ? `, and ${formatNumber(more)} more` : ''}`
+}
+
+const THINGS = { card: 'card', corner: 'corner', book: 'book', layout: 'layout' } as const
+
+function thingWords(thing: ToldChange['thing']): string {
+  if (thing.kind === 'mark') return markKind(thing.mark, thing.role, thing.gear)
+  return 'name' in thing ? thing.name : THINGS[thing.kind]
+}
+
+const WHERE: Record<Ground, string> = { sim: 'in the simulator', real: 'on the real track' }
+
+function deedWords(what: Deed): string {
+  switch (what.deed) {
+    case 'added':
+      return 'added'
+    case 'dropped':
+      return 'taken off'
+    case 'restored':
+      return 'put back'
+    case 'archived':
+      return 'archived'
+    case 'merged':
+      return 'made one with another'
+    case 'undone':
+      return 'put back as it was'
+    case 'renamed':
+      return 'renamed'
+    case 'placed':
+      return `placed ${WHERE[what.ground]}`
+    case 'cleared':
+      return `has no place ${WHERE[what.ground]} any more`
+    case 'tied':
+      return `tied again ${WHERE[what.ground]}`
+    case 'moved':
+      return `moved ${movedBy(what.ahead, what.left)} ${WHERE[what.ground]}`
+    case 'set':
+      return setWords(what.set)
+  }
+}
+
+/** "9 m sooner", "1 m left"; of both the greater, and under half a metre with its tenths. */
+function movedBy(ahead: Metres, left: Metres): string {
+  const along = Math.abs(ahead) >= Math.abs(left)
+  const by = along ? ahead : left
+  const word = along ? (by < 0 ? 'sooner' : 'later') : by > 0 ? 'left' : 'right'
+  return `${formatMetres(by, Math.abs(by) < 0.95 ? 1 : 0)} ${word}`
+}
+
+/** Fields whose value is too long to say; and what the others are called where a value alone would not say it. */
+const FIELDS: Record<string, string> = {
+  line: 'line',
+  kerbs: 'kerbs',
+  surface: 'surface',
+  water: 'standing water',
+  car: 'what the car does',
+  mistake: 'usual mistake',
+  traffic: 'passing and traffic',
+  limits: 'track limits',
+  backup: 'backup reference',
+  next: 'what comes next',
+  setsUp: 'what it sets up',
+  compromisedFor: 'what it is compromised for',
+  startAlong: 'start line',
+  reversed: 'direction of travel',
+  roadWidth: 'width of the road',
+  datum: 'datum',
+  forPerson: 'whose it is',
+  role: 'role',
+  conditionId: 'condition',
+}
+
+const NUMBERS: Record<string, (value: number) => string> = {
+  gear: formatGear,
+  gearIn: (value) => `${formatGear(value)} in`,
+  gearOut: (value) => `${formatGear(value)} out`,
+  speed: (value) => formatSpeed(metresPerSecond(value)),
+  speedIn: (value) => `${formatSpeed(metresPerSecond(value))} in`,
+  leastSpeed: (value) => `${formatSpeed(metresPerSecond(value))} at the slowest`,
+  downshifts: (value) => `down ${formatNumber(value)}`,
+}
+
+/** A value short enough to say, or null. */
+function valueWords(field: string, value: Json): string | null {
+  if (typeof value === 'number') return NUMBERS[field]?.(value) ?? null
+  if (field === 'manner' && value !== null) return mannerWord(value as Manner)
+  if (field === 'flat') return value ? 'flat' : 'not flat'
+  if (field === 'noReference') return value ? 'without a reference so far' : 'with a reference'
+  return null
+}
+
+/** "now 3rd, trail"; "rewritten: line, kerbs". */
+function setWords(set: Record<string, Json>): string {
+  const fields = Object.keys(set)
+  const said = fields.flatMap((field) => valueWords(field, set[field] ?? null) ?? [])
+  const others = fields.filter((field) => valueWords(field, set[field] ?? null) === null)
+  return [
+    ...(said.length > 0 ? [`now ${said.join(', ')}`] : []),
+    ...(others.length > 0 ? [`rewritten: ${others.map((field) => FIELDS[field] ?? field).join(', ')}`] : []),
+  ].join('; ')
+}
