@@ -11,6 +11,7 @@ import {
   type PlatedCorner,
   placePlates,
   plateShapes,
+  preferredBox,
   type SoftGround,
 } from '~/draw/plates'
 import { fitProjection, type Projection, sheetBox } from '~/draw/projection'
