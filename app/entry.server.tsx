@@ -38,6 +38,7 @@ export default function handleRequest(
   context: RouterContextProvider,
 ) {
   headers.set('Content-Type', 'text/html; charset=utf-8')
+  if (!headers.has('Cache-Control')) headers.set('Cache-Control', 'no-store')
   if (request.method === 'HEAD') return new Response(null, { status, headers })
   const nonce = context.get(nonceContext)
   const whole = routerContext.isSpaMode || isbot(request.headers.get('user-agent'))

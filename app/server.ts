@@ -48,6 +48,10 @@ function contextOf(response: Response): RouterContextProvider {
 export const app = express()
 app.disable('x-powered-by')
 app.set('trust proxy', env.TRUST_PROXY_HOPS)
+app.use((_request, response, next) => {
+  if (draining) response.set('Connection', 'close')
+  next()
+})
 app.use(requestId)
 app.use(requestLog(log))
 app.use(securityHeaders({ publicUrl: env.PUBLIC_URL, production, tileUrl: env.TILE_URL }))

@@ -1,16 +1,17 @@
 import type { Request, RequestHandler, Response } from 'express'
+import { sendProblem } from '~/middleware/send-problem.server'
 
 const megabyte = 1_000_000
 
 /** Bytes that a request may carry, unless its path is named in `largeBodies`. */
-export const bodyLimit = megabyte
+const bodyLimit = megabyte
 
 /** Paths that take files, with their limits in bytes; the `.data` form is the one a page's script calls. */
 const largeBodies: { path: RegExp; limit: number }[] = [
   { path: /^\/teams\/[^/]+\/circuits\/import(\.data)?$/, limit: 21 * megabyte },
 ]
 
-/** Bytes read on and thrown away after a refusal, so that the sender comes to read the answer. */
+/** Bytes above the limit that are read and thrown away, so that the sender comes to read the refusal. */
 const drained = 64 * megabyte
 
 /** What the reader of a body meets when the body turns out larger than allowed. The answer is already sent. */
@@ -23,36 +24,45 @@ export function limitFor(path: string): number {
   return largeBodies.find((route) => route.path.test(path))?.limit ?? bodyLimit
 }
 
-function refuse(response: Response, limit: number) {
-  response.set('Connection', 'close').status(413).type('text/plain')
-  response.send(`More than ${limit / megabyte} MB was sent. Nothing of it was kept.\n`)
-}
-
-function countBody(request: Request, response: Response, limit: number) {
+/** Reads the rest of a body away, then calls `done`; a sender without end is cut off. */
+function drain(request: Request, done: () => void) {
   let seen = 0
-  let refused = false
   request.on('data', (chunk: Buffer) => {
     seen += chunk.length
-    if (seen > limit + drained) request.destroy()
-    if (refused || seen <= limit) return
-    refused = true
-    if (!response.headersSent) refuse(response, limit)
-    if (request.listenerCount('error') > 0) request.emit('error', new BodyTooLarge())
-    request.resume()
+    if (seen > drained) request.destroy()
   })
+  request.once('end', done)
+  request.resume()
+}
+
+function refuse(request: Request, response: Response, limit: number) {
+  drain(request, () => {
+    if (!response.headersSent) sendProblem(response, 'too-much', { megabytes: limit / megabyte })
+  })
+}
+
+/** Lets the body pass and counts it. What listens to the body hears an error in place of the byte that is too much. */
+function countBody(request: Request, response: Response, limit: number) {
+  let seen = 0
+  const count = (chunk: Buffer) => {
+    seen += chunk.length
+    if (seen <= limit) return
+    request.off('data', count)
+    refuse(request, response, limit)
+    if (request.listenerCount('error') > 0) request.emit('error', new BodyTooLarge())
+  }
+  request.on('data', count)
   request.pause()
 }
 
 /**
- * Refuses a body above the limit of its path with 413: at once when `Content-Length` says so, else as soon as that many
- * bytes have come. Stands before anything that reads a body.
+ * Refuses a body above the limit of its path with 413: by `Content-Length` before anything reads it, else as soon as that
+ * many bytes have come. Stands before anything that reads a body.
  */
 export const limitBody: RequestHandler = (request, response, next) => {
-  const limit = limitFor(request.path)
-  const refusedAtOnce = Number(request.headers['content-length'] ?? 0) > limit
   if (request.method === 'GET' || request.method === 'HEAD') return next()
-  countBody(request, response, refusedAtOnce ? 0 : limit)
-  if (!refusedAtOnce) return next()
-  refuse(response, limit)
-  request.resume()
+  const limit = limitFor(request.path)
+  if (Number(request.headers['content-length'] ?? 0) > limit) return refuse(request, response, limit)
+  countBody(request, response, limit)
+  next()
 }

@@ -1,5 +1,6 @@
 import type { IncomingHttpHeaders } from 'node:http'
 import type { RequestHandler } from 'express'
+import { sendProblem } from '~/middleware/send-problem.server'
 
 const reading = new Set(['GET', 'HEAD', 'OPTIONS'])
 
@@ -17,6 +18,6 @@ export function sameOrigin(publicUrl: string): RequestHandler {
   return (request, response, next) => {
     const own = [publicUrl, `${request.protocol}://${request.get('host')}`]
     if (reading.has(request.method) || isSameOrigin(request.headers, own)) return next()
-    response.status(403).type('text/plain').send('This request came from another site.\n')
+    sendProblem(response, 'other-site')
   }
 }

@@ -7,6 +7,7 @@ import { signInSchema } from '~/components/sign-in/schema'
 import { SignInForm } from '~/components/sign-in/sign-in-form'
 import { clientAddressContext } from '~/middleware/context'
 import { personContext } from '~/middleware/person.server'
+import { readForm } from '~/middleware/read-form.server'
 import { problem } from '~/words/problems'
 import { signInWords } from '~/words/sign-in'
 import { pageTitle } from '~/words/titles'
@@ -21,7 +22,7 @@ export function loader({ url, context }: Route.LoaderArgs) {
 }
 
 export async function action({ request, context }: Route.ActionArgs) {
-  const submission = parseWithZod(await request.formData(), { schema: signInSchema })
+  const submission = parseWithZod(await readForm(request), { schema: signInSchema })
   if (submission.status !== 'success') {
     return data(submission.reply({ hideFields: ['password'] }), { status: problem('form').status })
   }

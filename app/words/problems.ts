@@ -11,6 +11,7 @@ export type ProblemCode =
   | Reason
   | RefusalCode
   | 'form'
+  | 'broken-form'
   | 'wrong-sign-in'
   | 'too-many-tries'
   | 'not-found'
@@ -18,6 +19,7 @@ export type ProblemCode =
   | 'taken'
   | 'in-use'
   | 'too-large'
+  | 'too-much'
   | 'no-file'
   | 'broken-upload'
   | 'unreadable-file'
@@ -48,6 +50,7 @@ const theFile = (file: string | undefined) => (file ? `“${file}”` : 'The fil
 
 const ENTRIES: Record<ProblemCode, Entry> = {
   form: [400, 'Some of this does not fit.', 'Look at the fields marked below. What you typed is kept.'],
+  'broken-form': [400, 'The form did not arrive whole.', 'Go back and send it once more.'],
   'wrong-sign-in': [
     400,
     'That did not let you in.',
@@ -79,6 +82,11 @@ const ENTRIES: Record<ProblemCode, Entry> = {
     'The file is too large.',
     ({ file, megabytes }) =>
       `${theFile(file)} is larger than ${megabytes ?? 20}\u00a0MB. Export one lap or the centreline alone, then bring that in.`,
+  ],
+  'too-much': [
+    413,
+    'Too much was sent.',
+    ({ megabytes }) => `More than ${megabytes ?? 1}\u00a0MB. Nothing of it was kept.`,
   ],
   'no-file': [400, 'No file was chosen.', 'Choose the circuit’s file: GeoJSON, GPX, KML or CSV.'],
   'broken-upload': [400, 'The file did not arrive whole.', 'Choose it again and send it once more.'],

@@ -1,5 +1,6 @@
 import {
   appendFileSync,
+  chmodSync,
   chownSync,
   existsSync,
   mkdirSync,
@@ -25,7 +26,8 @@ async function numericId(flag) {
 
 /** Makes a folder that the user that runs PostgreSQL owns. */
 async function makeOwnFolder(path) {
-  mkdirSync(path, { recursive: true, mode: 0o700 })
+  mkdirSync(path, { recursive: true })
+  chmodSync(path, 0o700)
   if (asRoot) chownSync(path, await numericId('-u'), await numericId('-g'))
 }
 

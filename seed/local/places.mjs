@@ -17,10 +17,14 @@ const states = asRoot ? '/var/lib' : (process.env.XDG_STATE_HOME ?? join(homedir
 /** Databases of this checkout. Outside it, where the unprivileged user that runs PostgreSQL can go. */
 export const stateFolder = join(states, `turnstone-${checkout}`)
 
+/** Clusters of test runs, one each. */
+export const testClusters = join(stateFolder, 'tests')
+
 export function makeFolders() {
   mkdirSync(join(localFolder, 'log'), { recursive: true })
   chmodSync(localFolder, 0o700)
-  mkdirSync(stateFolder, { recursive: true, mode: 0o755 })
+  mkdirSync(testClusters, { recursive: true })
+  if (asRoot) for (const folder of [stateFolder, testClusters]) chmodSync(folder, 0o755)
 }
 
 /** The log file of one step. */

@@ -1,4 +1,4 @@
-import { existsSync, readdirSync } from 'node:fs'
+import { readdirSync } from 'node:fs'
 import { join } from 'node:path'
 import { ensureBuild } from './build.mjs'
 import { startProcess, untilHealthy } from './children.mjs'
@@ -7,7 +7,7 @@ import { single, sum } from './counts.mjs'
 import { ensureDatabase } from './database.mjs'
 import { seedDemo } from './demo.mjs'
 import { alone, atEnd, isAlive, nameOf } from './lifetime.mjs'
-import { stateFolder } from './places.mjs'
+import { testClusters } from './places.mjs'
 import { freePort } from './ports.mjs'
 import { migrate, prepareFolders, prepareTools } from './prepare.mjs'
 import { newPassword } from './secrets.mjs'
@@ -16,16 +16,15 @@ import * as suites from './suites.mjs'
 
 process.env.TZ = 'Pacific/Auckland'
 
-const clusters = join(stateFolder, 'tests')
 const passwords = { owner: newPassword(), app: newPassword() }
 const demoPassword = newPassword(9)
 
 /** A cluster for this run alone; what killed runs left behind is removed. */
 async function throwAwayCluster() {
-  for (const name of existsSync(clusters) ? readdirSync(clusters) : []) {
-    if (!isAlive(name)) await new Cluster(join(clusters, name)).destroy()
+  for (const name of readdirSync(testClusters)) {
+    if (!isAlive(name)) await new Cluster(join(testClusters, name)).destroy()
   }
-  const cluster = new Cluster(join(clusters, nameOf(process.pid)), { throwAway: true })
+  const cluster = new Cluster(join(testClusters, nameOf(process.pid)), { throwAway: true })
   atEnd(() => cluster.destroy())
   await cluster.start()
   return cluster
@@ -117,8 +116,8 @@ async function runSuite(name, run) {
     try {
       result = await run()
     } catch (error) {
-      if (!(error instanceof Stop)) throw error
-      result = { count: single(false), output: `${error.message}\n${error.details}` }
+      const output = error instanceof Stop ? `${error.message}\n${error.details}` : error.stack
+      result = { count: single(false), output }
     }
     return `${result.count.passed} passed, ${result.count.failed} failed`
   })

@@ -1,6 +1,6 @@
 import { describe, expect, it, test } from 'vitest'
 import { isTest, sourcesBelow } from './sources'
-import { environmentProblem, impurities, leftOver, nameProblem } from './text-rules'
+import { environmentProblem, formProblem, impurities, leftOver, nameProblem } from './text-rules'
 
 const sources = sourcesBelow('app', 'seed', 'tests')
 const own = /^tests\/house\/text-rules/
@@ -16,6 +16,10 @@ test('only env.server.ts reads the environment', () => {
 test('nothing is left open, silenced, swallowed or skipped', () => {
   const looked = sources.filter(({ path }) => !own.test(path))
   expect(looked.flatMap((source) => leftOver(source) ?? [])).toEqual([])
+})
+
+test('forms are read by readForm', () => {
+  expect(sources.flatMap((source) => formProblem(source) ?? [])).toEqual([])
 })
 
 test('every module is named after what it holds', () => {
@@ -55,6 +59,11 @@ describe('the other checks see', () => {
       expect(environmentProblem({ path: 'app/env.server.ts', text })).toBeUndefined()
     },
   )
+  it('a form that a route reads itself', () => {
+    const text = 'const form = await request.formData()'
+    expect(formProblem({ path: 'app/routes/sign-in.tsx', text })).toBeDefined()
+    expect(formProblem({ path: 'app/middleware/read-form.server.ts', text })).toBeUndefined()
+  })
   it.each([
     '// TODO later',
     'const a = b as any',

@@ -50,6 +50,12 @@ const leftOvers: [what: string, pattern: RegExp][] = [
   ['a sleep', /waitForTimeout|new Promise\(\(?\w*\)? => setTimeout\(/],
 ]
 
+/** A form is read where a broken one becomes a refusal. */
+export function formProblem({ path, text }: Source): string | undefined {
+  if (!path.startsWith('app/') || path === 'app/middleware/read-form.server.ts') return undefined
+  return /\.formData\(\)/.test(text) ? `${path} reads a form itself: readForm does` : undefined
+}
+
 /** Things that are never left in a file. The files that name them in order to find them are not looked at. */
 export function leftOver({ path, text }: Source): string | undefined {
   const found = leftOvers.find(([, pattern]) => pattern.test(text))

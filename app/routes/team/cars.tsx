@@ -10,6 +10,7 @@ import { PageBody, PageHead } from '~/components/frame/page-frame'
 import { Empty } from '~/components/ui/empty'
 import { addCar, changeCar, readCars } from '~/db/cars.server'
 import { dbContext } from '~/middleware/context'
+import { readForm } from '~/middleware/read-form.server'
 import { allow, refusalOf } from '~/middleware/refusal.server'
 import { teamContext } from '~/middleware/team.server'
 import { carWords as words } from '~/words/cars'
@@ -32,7 +33,7 @@ export async function loader({ url, context }: Route.LoaderArgs) {
 export async function action({ request, params, context }: Route.ActionArgs) {
   const { actor } = context.get(teamContext)
   allow(actor, 'car.change')
-  const submission = parseWithZod(await request.formData(), { schema: carSchema })
+  const submission = parseWithZod(await readForm(request), { schema: carSchema })
   if (submission.status !== 'success') return data(submission.reply(), { status: problem('form').status })
   const db = context.get(dbContext)
   const car = { ...submission.value, id: submission.value.id as CarId }
