@@ -9,6 +9,7 @@ export default [
   route('teams/:team', 'routes/team/guard.tsx', [
     route('geometry/:hash', 'routes/team/geometry.ts'),
     route('books/:book', 'routes/book/layout.tsx', [
+      route('corners/:number', 'routes/book/corner.tsx'),
       route('corners/:number.geojson', 'routes/book/corner-geojson.ts'),
     ]),
     layout('routes/team/layout.tsx', [index('routes/team/home.tsx'), route('cars', 'routes/team/cars.tsx')]),

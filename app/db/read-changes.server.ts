@@ -1,10 +1,10 @@
-import { and, desc, eq, lt } from 'drizzle-orm'
+import { and, desc, eq, inArray, lt, or, sql } from 'drizzle-orm'
 import type { Actor } from '~/book/actions'
-import type { BookId, LayoutId, OperationId, PersonId } from '~/book/ids'
+import type { BookId, CardId, LayoutId, OperationId, PersonId } from '~/book/ids'
 import type { FieldChange, TargetKind } from '~/book/operation'
 import type { Db } from './database'
 import { ownTeam } from './own-team'
-import { changes } from './schema'
+import { changes, marks } from './schema'
 
 /** One line of the change log. */
 export interface Change {
@@ -29,6 +29,8 @@ export interface Change {
 export interface ChangesAsked {
   book?: BookId
   layout?: LayoutId
+  /** Only changes of this card and of its marks, dropped ones too. */
+  card?: CardId
   /** Only lines before this one. */
   before?: number
   limit: number
@@ -60,6 +62,7 @@ export async function readChanges(db: Db, actor: Actor, asked: ChangesAsked): Pr
         ownTeam(actor, changes.teamId),
         asked.book && eq(changes.bookId, asked.book),
         asked.layout && eq(changes.layoutId, asked.layout),
+        asked.card && or(eq(changes.targetId, asked.card), inArray(changes.targetId, marksOf(db, actor, asked.card))),
         asked.before === undefined ? undefined : lt(changes.id, asked.before),
       ),
     )
@@ -72,3 +75,9 @@ export async function readChanges(db: Db, actor: Actor, asked: ChangesAsked): Pr
     writtenAt: writtenAt.toISOString(),
   }))
 }
+
+const marksOf = (db: Db, actor: Actor, card: CardId) =>
+  db
+    .select({ id: sql<string>`${marks.id}` })
+    .from(marks)
+    .where(and(ownTeam(actor, marks.teamId), eq(marks.cardId, card)))

@@ -45,9 +45,7 @@ export function ProposalsList({ page }: { page: CornerPageData }) {
       <ul className="changes">
         {page.proposals.map((proposal) => (
           <li key={proposal.id}>
-            <span>
-              {proposal.words} {proposal.reason ? <q>{proposal.reason}</q> : null}
-            </span>
+            <span>{proposal.words}</span>
             <span className="muted">{firstName(page, proposal.by)}</span>
             {page.may.decide ? (
               <Form method="post" preventScrollReset className="decide">

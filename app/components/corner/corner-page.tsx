@@ -33,7 +33,7 @@ export function CornerPage({ page, result, lastResult }: CornerPageProps) {
         <CornerHead page={page} linkWith={linkWith} />
         {result ? <Outcome {...{ result, closeTo }} operation={page.ids.operation} /> : null}
         <Suspense fallback={<div className="map-panel waiting" />}>
-          <MapPanel {...{ page, linkWith }} selected={open.mark} />
+          <MapPanel page={page} />
         </Suspense>
         <OpenForm {...{ page, open, closeTo, lastResult }} />
         {page.lines.length > 0 ? (

@@ -1,12 +1,15 @@
 import type { Actor } from '~/book/actions'
+import { type LoggedChange, tellChanges } from '~/book/changes'
 import type { CornerCut } from '~/book/cuts'
 import { type MarkLine, markLines } from '~/book/distances'
 import { drivenDistance } from '~/book/driven-line'
 import type { ConditionId, MarkId, OperationId, PersonId } from '~/book/ids'
 import { marksFor } from '~/book/marks-for'
 import { may } from '~/book/may'
-import type { GroundChoice } from '~/book/view'
+import type { Operation } from '~/book/operation'
+import type { BookView, GroundChoice } from '~/book/view'
 import type { LayoutFrame } from '~/track/layout-frame'
+import { changeWords } from '~/words/changes'
 
 /** What the corner page is given: the cut of the book, how it is looked at, and what this person may do. */
 export interface CornerPageData {
@@ -36,15 +39,55 @@ export interface ChangeData {
 }
 
 export interface ProposalData {
-  id: string
-  by: PersonId
+  id: OperationId
+  by: PersonId | null
   words: string
-  reason: string | null
+}
+
+type PersonActor = Extract<Actor, { kind: 'person' }>
+
+/** Lines of the change log as this person may take them back. */
+export function changeData(
+  actor: PersonActor,
+  view: BookView,
+  cut: CornerCut,
+  logged: readonly LoggedChange[],
+): ChangeData[] {
+  const makers = new Map<string, PersonId>(cut.corner.marks.map((mark) => [mark.id, mark.madeBy]))
+  const targets = new Map(logged.map((change) => [change.operation, change.target.id]))
+  return tellChanges(logged, view).map((told) => {
+    const madeBy = makers.get(targets.get(told.operation) ?? '') ?? told.by
+    const mayUndo = may(actor, 'mark.change', { archived: view.book.archived, madeBy }).ok
+    return { operation: told.operation, by: told.by, words: changeWords(told), mayUndo }
+  })
+}
+
+interface Waiting {
+  id: OperationId
+  by: PersonId | null
+  operation: Operation
+}
+
+/** What waits for the coach in this corner. */
+export function proposalData(view: BookView, cut: CornerCut, waiting: readonly Waiting[]): ProposalData[] {
+  const here = new Set<string>([cut.corner.card.id, ...cut.corner.marks.map((mark) => mark.id)])
+  const logged = waiting
+    .filter(({ operation }) => here.has(operation.target.id))
+    .map(({ id, by, operation }) => ({
+      operation: id,
+      target: operation.target,
+      set: operation.set,
+      reason: operation.reason ?? null,
+      undoes: operation.undoes ?? null,
+      batch: null,
+      by,
+    }))
+  return tellChanges(logged, view).map((told) => ({ id: told.operation, by: told.by, words: changeWords(told) }))
 }
 
 interface Sources
   extends Pick<CornerPageData, 'team' | 'cut' | 'names' | 'ids' | 'show' | 'condition' | 'changes' | 'proposals'> {
-  actor: Extract<Actor, { kind: 'person' }>
+  actor: PersonActor
   frame: LayoutFrame
 }
 

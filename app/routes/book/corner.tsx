@@ -9,7 +9,7 @@ import { lookAt } from '~/book/look'
 import { CornerPage } from '~/components/corner/corner-page'
 import { type CornerIntent, cornerForm } from '~/components/corner/mark-forms'
 import { markIntent } from '~/components/corner/mark-intent'
-import { cornerPageData } from '~/components/corner/page-data'
+import { changeData, cornerPageData, proposalData } from '~/components/corner/page-data'
 import { type CornerResult, intentResult, plainResult } from '~/components/corner/result'
 import { applyOperation } from '~/db/apply.server'
 import type { Db } from '~/db/database'
@@ -20,6 +20,7 @@ import { undoOperation } from '~/db/undo.server'
 import { bookContext } from '~/middleware/book.server'
 import { dbContext } from '~/middleware/context'
 import { layOutGeometry } from '~/middleware/lay-out-geometry.server'
+import { readForm } from '~/middleware/read-form.server'
 import { refusal } from '~/middleware/refusal.server'
 import { teamContext } from '~/middleware/team.server'
 import { makeLapFrame } from '~/track/lap-frame'
@@ -40,20 +41,21 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
   if (!cut) throw refusal('not-found')
   const db = context.get(dbContext)
   const { actor, team } = context.get(teamContext)
+  const scope = { kind: 'book', id: view.book.id } as const
   const [frame, names, changes, proposals] = await Promise.all([
     layOutGeometry(context, actor, view.layout),
     readNames(db, actor),
-    readChanges(db, actor, view.book.id),
-    listProposals(db, actor, { kind: 'book', id: view.book.id }),
+    readChanges(db, actor, { book: view.book.id, card: cut.corner.card.id, limit: 12 }),
+    listProposals(db, actor, scope),
   ])
   return cornerPageData({
     team: team.slug,
     cut,
     actor,
     frame,
-    names,
-    changes,
-    proposals,
+    names: Object.fromEntries(names),
+    changes: changeData(actor, view, cut, changes),
+    proposals: proposalData(view, cut, proposals),
     ...lookAt(view.conditions, {
       condition: url.searchParams.get('condition'),
       show: url.searchParams.get('show'),
@@ -65,7 +67,7 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
 export async function action({ request, context, params }: Route.ActionArgs) {
   const cut = cornerOf(context.get(bookContext), params.number)
   if (!cut) throw refusal('not-found')
-  const form = await request.formData()
+  const form = await readForm(request)
   const submission = parseWithZod(form, { schema: cornerForm })
   if (submission.status !== 'success') return data({ result: null, lastResult: submission.reply() }, 400)
   const sent = Object.fromEntries([...form].map(([name, value]) => [name, String(value)]))
