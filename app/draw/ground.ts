@@ -1,5 +1,6 @@
 import type { Feature, FeatureCollection, Position as GeoPosition } from 'geojson'
 import type { Plane, PlanePoint } from '~/track/plane'
+import { type Metres, metres } from '~/track/units'
 
 /** What `properties.kind` of a ground feature may be. Anything else is left out of a drawing. */
 export const GROUND_KINDS = [
@@ -64,6 +65,14 @@ function inPlane(feature: Feature, kind: GroundKind, plane: Plane): GroundFeatur
   if (geometry.type === 'Point') read.points = line([geometry.coordinates])
   if (geometry.type === 'MultiPoint') read.points = line(geometry.coordinates)
   return read
+}
+
+/** Metres between one contour and the next; null where there are none, or one alone. */
+export function contourStep(features: readonly GroundFeature[]): Metres | null {
+  const heights = [...new Set(features.flatMap(({ kind, height }) => (kind === 'contour' ? (height ?? []) : [])))]
+  const sorted = heights.sort((a, b) => a - b)
+  const steps = sorted.slice(1).map((height, i) => height - sorted[i]!)
+  return steps.length === 0 ? null : metres(Math.min(...steps))
 }
 
 /** A ring is where a line comes back to its first point. */

@@ -1,19 +1,13 @@
+import type { TurnDirection } from '~/book/kinds'
 import type { LandmarkView } from '~/book/view'
 import { builtShapes, groundRings } from '~/draw/built-shapes'
 import { type Box, type DisplayList, type Point, path, px, type Shape } from '~/draw/display-list'
 import { type CartoucheWords, cartouche } from '~/draw/furniture'
 import { type GroundFeature, type GroundKind, type Water, watersOf } from '~/draw/ground'
 import { boundsOf, clipRing, cornersOf, simplifyLine, simplifyRing } from '~/draw/lines'
+import type { PlateCorner } from '~/draw/number-plate'
 import { placeNames, waterNames } from '~/draw/place-names'
-import {
-  type Plate,
-  type PlateCorner,
-  type PlatedCorner,
-  placePlates,
-  plateShapes,
-  preferredBox,
-  type SoftGround,
-} from '~/draw/plates'
+import { type Plate, type PlatedCorner, placePlates, plateShapes, preferredBox, type SoftGround } from '~/draw/plates'
 import { fitProjection, type Projection, sheetBox } from '~/draw/projection'
 import { reliefShapes, waterShapes } from '~/draw/relief-shapes'
 import type { Road } from '~/draw/road'
@@ -25,6 +19,7 @@ import { type Station, station } from '~/track/units'
 
 /** A corner on the map of the lap. */
 export interface LapCorner extends PlateCorner {
+  direction: TurnDirection
   apex: Station
 }
 

@@ -1,21 +1,8 @@
-import type { TurnDirection } from '~/book/kinds'
-import { type Box, type GroupShape, type Point, rect, type Shape, text } from '~/draw/display-list'
+import { type Box, type GroupShape, type Point, rect, text } from '~/draw/display-list'
 import { boundsOf, insideRing, overlap } from '~/draw/lines'
+import { numberWidth, PLATE_HEIGHT, type PlateCorner, plateField, plateGroup } from '~/draw/number-plate'
 import { boxDistance2, grown, isFree, type Room } from '~/draw/room'
 import { type Reader, textSize, textWidth } from '~/draw/text-styles'
-
-/** A corner as a map of the lap shows it. */
-export interface PlateCorner {
-  id: string
-  number: string
-  name: string
-  direction: TurnDirection
-  /** Orange: an open question, or the corner looked at. */
-  open?: boolean
-  href?: string
-  /** What a screen reader says of the link. */
-  label?: string
-}
 
 export interface PlatedCorner {
   corner: PlateCorner
@@ -31,13 +18,11 @@ export interface Plate {
   named: boolean
 }
 
-const HEIGHT = 19
 const GAP = 5
-const numberWidth = (number: string) => Math.max(HEIGHT, 8 + textWidth(number, 'plate-number'))
 
 function sizeOf(corner: PlateCorner, named: boolean, reader: Reader) {
   const name = named ? GAP + textWidth(corner.name, 'corner-name', textSize('corner-name', reader)) : 0
-  return { width: numberWidth(corner.number) + name, height: HEIGHT }
+  return { width: numberWidth(corner.number) + name, height: PLATE_HEIGHT }
 }
 
 /** Ways from the outside direction, degrees, and what each costs; the inside of the bend comes last. */
@@ -157,23 +142,12 @@ export function placePlates(
   return placed.map(({ plated, box, named }) => ({ corner: plated.corner, box, named }))
 }
 
-/** A plate as one link or group. */
+/** A plate with its name and the room around it that a finger needs. */
 export function plateShapes({ corner, box, named }: Plate, reader: Reader): GroupShape {
-  const width = numberWidth(corner.number)
-  const baseline = box.y + 14.5
-  const shapes: Shape[] = [
-    rect('target', { x: box.x - 8, y: box.y - 8, width: box.width + 16, height: box.height + 16 }),
-    rect(corner.open ? 'plate-open' : 'plate', { x: box.x, y: box.y, width, height: HEIGHT }, 2),
-    text(corner.open ? 'plate-open-number' : 'plate-number', [box.x + width / 2, baseline], corner.number, {
-      anchor: 'middle',
-    }),
-    ...(named ? [text('corner-name', [box.x + width + GAP, baseline], corner.name, { halo: 'sand', reader })] : []),
-  ]
-  return {
-    type: 'group',
-    id: corner.id,
-    ...(corner.href === undefined ? {} : { href: corner.href }),
-    label: corner.label ?? `${corner.number} ${corner.name}`,
-    shapes,
-  }
+  const nameAt: Point = [box.x + numberWidth(corner.number) + GAP, box.y + 14.5]
+  return plateGroup(corner, [
+    rect('target', grown(box, 8)),
+    ...plateField(corner, [box.x, box.y]),
+    ...(named ? [text('corner-name', nameAt, corner.name, { halo: 'sand', reader })] : []),
+  ])
 }
