@@ -41,15 +41,13 @@ interface Span {
 
 const middleOf = ({ from, to }: Span) => Math.round((from + to) / 2)
 
-/** Runs of neighbouring samples for which `holds` is true, round the ring. */
-function runsWhere(count: number, holds: (i: number) => boolean): Span[] {
-  let outside = 0
-  while (outside < count && holds(outside)) outside++
-  if (outside === count) return [{ from: 0, to: count - 1 }]
+/** Runs of neighbouring samples for which `holds` is true, round the ring from a sample where it is not, if there is one. */
+function runsWhere(count: number, start: number, holds: (i: number) => boolean): Span[] {
+  if (holds(start)) return [{ from: start, to: start + count - 1 }]
   const runs: Span[] = []
   let from = -1
-  for (let i = outside + 1; i <= outside + count; i++) {
-    const inside = holds(i % count)
+  for (let i = start + 1; i <= start + count; i++) {
+    const inside = holds(i)
     if (inside && from < 0) from = i
     if (!inside && from >= 0) {
       runs.push({ from, to: i - 1 })
@@ -128,7 +126,9 @@ function cornersOfSign(shape: Shape, sign: 1 | -1, smooth: Float64Array, fine: F
     return (turn * 180) / Math.PI
   }
   const stationOf = (i: number) => station(wrap(i * shape.step, length))
-  return runsWhere(shape.count, (i) => bend(i) > leastBend)
+  let straightest = 0
+  for (let i = 1; i < shape.count; i++) if (bend(i) < bend(straightest)) straightest = i
+  return runsWhere(shape.count, straightest, (i) => bend(i) > leastBend)
     .flatMap((run) => splitAtValleys(run, bend, turnOf))
     .map((span) => ({ span, tight: tightestPart(span, bend), turn: turnOf(span) }))
     .filter(({ tight, turn }) => bend(tight.peak) > cornerBend && turn >= leastTurn)
