@@ -9,6 +9,7 @@ export default [
   route('teams/:team', 'routes/team/guard.tsx', [
     route('geometry/:hash', 'routes/team/geometry.ts'),
     route('books/:book', 'routes/book/layout.tsx', [
+      index('routes/book/overview.tsx'),
       route('corners/:number', 'routes/book/corner.tsx'),
       route('corners/:number.geojson', 'routes/book/corner-geojson.ts'),
     ]),

@@ -1,7 +1,9 @@
 import { CORNER_STATES, type CornerState } from '~/book/cuts'
 import type { TurnDirection } from '~/book/kinds'
 import type { Gap } from '~/book/missing'
-import type { Metres, MetresPerSecond } from '~/track/units'
+import type { HeightNote } from '~/draw/height-notes'
+import type { HeightWords } from '~/draw/lap-heights'
+import { type Metres, type MetresPerSecond, metres } from '~/track/units'
 import { count, formatGear, formatKilometres, formatKmhFigure, formatMetres } from './measures'
 
 /** What the overview of a book says. */
@@ -79,6 +81,26 @@ export const plateLabel = (corner: { number: string; name: string; direction: Tu
 
 export const heightsLabel = 'Heights along the lap, from start line to start line'
 
+function heightNote(note: HeightNote): string {
+  const height = formatMetres(note.height)
+  switch (note.code) {
+    case 'crest':
+      return note.corner === null ? `highest ${height}` : `${note.corner} crest ${height}`
+    case 'lowest':
+      return `lowest ${height}`
+    case 'up':
+      return `up ${formatMetres(note.metres)}`
+    case 'down':
+      return `down ${formatMetres(note.metres)} to ${note.corner}`
+  }
+}
+
+export const heightWords: HeightWords = {
+  metres: (value) => formatMetres(metres(value)),
+  lap: 'one lap, start line to start line',
+  note: heightNote,
+}
+
 export const overviewWords = {
   corners: 'Corners',
   cornersCaption: 'Corners in driving order',
@@ -92,7 +114,6 @@ export const overviewWords = {
   conditions: 'Condition',
   missing: 'Still missing',
   changed: 'Changed lately',
-  lap: 'one lap, start line to start line',
   noHeights: 'No heights: the circuit’s file has none.',
   emptyLead: 'No marks in this book yet.',
   emptyQuestion: 'One brake mark in each corner makes a first book. Where do you brake for the first one?',
