@@ -3,8 +3,7 @@ import pg from 'pg'
 import { env } from '~/env.server'
 import { errorEntry } from '~/error-entry.server'
 import { log } from '~/log.server'
-import demo from './demo-people.json'
-import { type DemoTeam, seedPeople } from './people'
+import { seedDemo } from './demo'
 
 /** Entry: puts the demo into the database of `OWNER_DATABASE_URL`, whole or not at all. Exits with 1 on failure. */
 async function seed() {
@@ -13,7 +12,8 @@ async function seed() {
   await client.connect()
   try {
     const password = env.DEMO_PASSWORD
-    await drizzle(client).transaction((db) => seedPeople(db, demo.teams as DemoTeam[], password))
+    const today = new Date().toISOString().slice(0, 10)
+    await drizzle(client).transaction((db) => seedDemo(db, password, today))
   } finally {
     await client.end()
   }
