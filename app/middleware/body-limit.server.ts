@@ -24,21 +24,18 @@ export function limitFor(path: string): number {
   return largeBodies.find((route) => route.path.test(path))?.limit ?? bodyLimit
 }
 
-/** Reads the rest of a body away, then calls `done`; a sender without end is cut off. */
-function drain(request: Request, done: () => void) {
+/** Reads the rest of a body away; a sender without end is cut off. */
+function drain(request: Request) {
   let seen = 0
   request.on('data', (chunk: Buffer) => {
     seen += chunk.length
     if (seen > drained) request.destroy()
   })
-  request.once('end', done)
   request.resume()
 }
 
-function refuse(request: Request, response: Response, limit: number) {
-  drain(request, () => {
-    if (!response.headersSent) sendProblem(response, 'too-much', { megabytes: limit / megabyte })
-  })
+function refuse(response: Response, limit: number) {
+  if (!response.headersSent) sendProblem(response, 'too-much', { megabytes: limit / megabyte })
 }
 
 /** Lets the body pass and counts it. What listens to the body hears an error in place of the byte that is too much. */
@@ -48,11 +45,18 @@ function countBody(request: Request, response: Response, limit: number) {
     seen += chunk.length
     if (seen <= limit) return
     request.off('data', count)
-    refuse(request, response, limit)
+    refuse(response, limit)
+    drain(request)
     if (request.listenerCount('error') > 0) request.emit('error', new BodyTooLarge())
   }
   request.on('data', count)
   request.pause()
+  // A body that its reader left half read would block the connection for the next request.
+  response.once('finish', () => {
+    if (request.readableEnded) return
+    request.removeAllListeners('data')
+    drain(request)
+  })
 }
 
 /**
@@ -62,7 +66,10 @@ function countBody(request: Request, response: Response, limit: number) {
 export const limitBody: RequestHandler = (request, response, next) => {
   if (request.method === 'GET' || request.method === 'HEAD') return next()
   const limit = limitFor(request.path)
-  if (Number(request.headers['content-length'] ?? 0) > limit) return refuse(request, response, limit)
+  if (Number(request.headers['content-length'] ?? 0) > limit) {
+    request.once('end', () => refuse(response, limit))
+    return drain(request)
+  }
   countBody(request, response, limit)
   next()
 }

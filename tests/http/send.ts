@@ -1,4 +1,4 @@
-import { request } from 'node:http'
+import { type Agent, request } from 'node:http'
 
 /** Where the server under test answers. */
 export const baseUrl = process.env.TEST_BASE_URL ?? 'http://localhost:3000'
@@ -12,13 +12,19 @@ type Request = {
   body?: string | Buffer
   /** Sent piece by piece, without a length. */
   pieces?: Buffer[]
+  /** The connections to send on. */
+  agent?: Agent
 }
 
 /** Sends a request just as it is given: no header is added but `Host`, nothing is followed. */
-export function send(path: string, { method = 'GET', headers = {}, body, pieces = [] }: Request = {}, base = baseUrl) {
+export function send(
+  path: string,
+  { method = 'GET', headers = {}, body, pieces = [], agent }: Request = {},
+  base = baseUrl,
+) {
   return new Promise<Answer>((resolve, reject) => {
     const length = body === undefined ? {} : { 'Content-Length': String(Buffer.byteLength(body)) }
-    const sent = request(new URL(path, base), { method, headers: { ...length, ...headers } }, (response) => {
+    const sent = request(new URL(path, base), { method, agent, headers: { ...length, ...headers } }, (response) => {
       let text = ''
       response.setEncoding('utf8')
       response.on('data', (piece: string) => {

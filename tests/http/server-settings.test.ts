@@ -1,3 +1,4 @@
+import { Agent } from 'node:http'
 import { describe, expect, it, test } from 'vitest'
 import { baseUrl, send } from './send'
 
@@ -130,6 +131,14 @@ describe('a body', () => {
     const answer = await send('/sign-in', { method: 'POST', headers: { ...fromHere, 'Content-Type': type }, body })
     expect(answer.status).toBe(400)
     expect(answer.text).toMatch('The form did not arrive whole.')
+  })
+
+  it('that nobody reads does not hold up the next request on its connection', async () => {
+    const agent = new Agent({ keepAlive: true, maxSockets: 1 })
+    const large = { method: 'POST', headers: fromHere, body: Buffer.alloc(900_000, 'a'), agent }
+    const answers = await Promise.all([send('/health', large), send('/health', large), send('/health', { agent })])
+    agent.destroy()
+    expect(answers[2].status).toBe(200)
   })
 
   it('that is refused leaves the server answering', async () => {
