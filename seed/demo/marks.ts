@@ -17,8 +17,8 @@ export interface DemoMark {
   madeAt: string
   fields: {
     kind: SourceMark['kind']
-    role: SourceMark['role'] | null
-    manner: SourceMark['manner'] | null
+    role: NonNullable<SourceMark['role']> | null
+    manner: NonNullable<SourceMark['manner']> | null
     gear: number
     downshifts: number | null
     /** m/s */

@@ -2,11 +2,11 @@ import { and, asc, eq, isNull } from 'drizzle-orm'
 import type { BookId, CardId, CornerId, LandmarkId, TeamId } from '~/book/ids'
 import { type Json, OPERATION_VERSION, type Operation, type Scope } from '~/book/operation'
 import type { Place, Placement } from '~/book/place'
+import { resolveTie } from '~/book/ties'
 import type { Db } from '../database'
 import { placeColumns, placeFrom } from '../placing'
 import { books, cards, marks, places, ties } from '../schema'
 import { newId } from './new-id'
-import { resolvedPlace } from './resolve'
 import { keyOf, type LockedScope } from './scopes'
 import type { Values } from './values'
 
@@ -41,11 +41,17 @@ export async function freeTies(db: Db, team: TeamId, drop: Operation, landmark: 
     const scope: Scope = { kind: 'book', id: book }
     const locked = scopes.get(keyOf(scope))
     if (!locked) return []
-    const from = resolvedPlace(placeFrom(row), landmark[row.ground] as unknown as Placement | null, locked)
-    const to: Place = { ...from, tie: from.tie && { ...from.tie, landmarkId: null, along: null } }
+    const from = placeFrom(row)
+    const to = freed(from, landmark[row.ground] as unknown as Placement | null, locked)
     const set = { [row.ground]: { from: from as unknown as Json, to: to as unknown as Json } }
     return [followUp(drop, scope, { kind: 'mark', id: mark }, set)]
   })
+}
+
+/** The place where its tie held it, hanging on nothing. */
+function freed(place: Place, placement: Placement | null, { length, reversed, carLength }: LockedScope) {
+  const at = resolveTie(place, placement, { length, reversed, carLength: carLength ?? 0 })
+  return { ...place, ...at, tie: place.tie && { ...place.tie, landmarkId: null, along: null } }
 }
 
 /** What a corner that comes to life does: every book of its layout that has no card for it gets one. */

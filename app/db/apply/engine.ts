@@ -16,7 +16,6 @@ import { newId } from './new-id'
 import { mayApply } from './permission'
 import { addChange, addReceipt, bodyHash, findReceipts } from './receipts'
 import { leavingProblems, numberTaken, referenceProblems } from './references'
-import { resolvePlaces } from './resolve'
 import { keyOf, type LockedScope } from './scopes'
 import { change, load, make, type Stored } from './targets'
 import { compare, normalNow, normalSet, type Problem, resultProblems, type Values, valuesTo } from './values'
@@ -58,14 +57,7 @@ export async function applyOne(work: Work, operation: Operation, manner: Manner)
   if (problems.length > 0) return invalid(problems)
   const target = await findTarget(work, operation, scope, manner)
   if (!target) return { kind: 'not-found' }
-  const meant = kind === 'mark' ? await withResolvedPlaces(work, scope, set) : set
-  return applyTo(work, operation, manner, { scope, set: meant, ...target })
-}
-
-/** The changes of a mark with the places they lead to where their ties hold them. */
-async function withResolvedPlaces({ db, team }: Work, scope: LockedScope, set: Record<string, FieldChange>) {
-  const to = await resolvePlaces(db, team, scope, valuesTo(set))
-  return Object.fromEntries(Object.entries(set).map(([field, { from }]) => [field, { from, to: to[field] ?? null }]))
+  return applyTo(work, operation, manner, { scope, set, ...target })
 }
 
 /** What became of an operation that was sent before, or null for a new one. */
@@ -98,8 +90,7 @@ async function findTarget(
     const makes = state?.from === null && state.to === 'live'
     if (!makes || kind === 'book' || kind === 'layout' || (kind === 'card' && asked)) return null
   }
-  const now = normalNow(kind, stored?.values ?? null, scope.length)
-  return { stored, now: kind === 'mark' ? await resolvePlaces(work.db, work.team, scope, now) : now }
+  return { stored, now: normalNow(kind, stored?.values ?? null, scope.length) }
 }
 
 interface Case extends Target {
