@@ -81,7 +81,7 @@ describe('what a change did', () => {
     ])
   })
 
-  it('changes made together are one line with the count of the others', () => {
+  it('changes made together are one line, told by the first of them', () => {
     const batch = 'together'
     const landmark = change({
       target: { kind: 'landmark', id: kerb.id },
@@ -89,7 +89,22 @@ describe('what a change did', () => {
       batch,
     })
     expect(tell([landmark, { ...moved(360, 372), batch }])).toMatchObject([
-      { thing: { kind: 'landmark', name: 'Apex kerb' }, what: { ahead: 12 }, more: 1 },
+      { thing: { kind: 'landmark', name: 'Apex kerb' }, what: { ahead: 12 }, count: 2, alike: false },
+    ])
+  })
+
+  it('the same done to several marks is told as that, of a corner only where it was one', () => {
+    const batch = 'together'
+    const other = mark({ id: 'm-other', card: ids.secondCard, kind: 'apex', real: place(1990, 3) })
+    const same = mark({ id: 'm-same', kind: 'apex', real: place(505, 3) })
+    const dropped = (id: string) =>
+      change({ target: { kind: 'mark', id }, set: { state: { from: 'live', to: 'dropped' } }, batch })
+    const rows = { marks: [brake, other, same] }
+    expect(tell([dropped('m-brake'), dropped('m-same')], rows)).toMatchObject([
+      { corner: { number: '1' }, count: 2, alike: true },
+    ])
+    expect(tell([dropped('m-brake'), dropped('m-other')], rows)).toMatchObject([
+      { corner: null, count: 2, alike: true },
     ])
   })
 })

@@ -34,13 +34,14 @@ export interface ToldChange {
     | { kind: 'landmark' | 'stretch' | 'condition'; name: string }
     | { kind: 'card' | 'corner' | 'book' | 'layout' }
   what: Deed
-  /** How many more changes were made together with it. */
-  more: number
+  /** How many changes were made together, this one among them; and whether all of them did the same to the same kind of thing. */
+  count: number
+  alike: boolean
 }
 
 /**
  * Changes worth telling, in the order given. What comes with a book or a corner by itself (a new card, a first condition) is
- * left out; of changes made together the first one speaks for all, with the count of the others.
+ * left out; changes made together are told as one.
  * @param changes latest first; what was dropped is named by the lines among them that made it
  */
 export function tellChanges(changes: readonly LoggedChange[], view: BookView): ToldChange[] {
@@ -48,16 +49,29 @@ export function tellChanges(changes: readonly LoggedChange[], view: BookView): T
   const frame = makeLapFrame({ length, startAlong: along(startAlong), reversed })
   const known = knownThings(changes, view)
   const told = new Map<string, ToldChange>()
-  for (const change of changes) {
-    const what = deedOf(change, frame)
-    const found = known.get(change.target.id)
+  for (const { operation, by, reason, batch, target, set, undoes } of changes) {
+    const what = deedOf({ target, set, undoes }, frame)
+    const found = known.get(target.id)
     if (!what || !found) continue
-    const key = change.batch ?? change.operation
-    const first = told.get(key)
-    if (first) first.more += 1
-    else told.set(key, { operation: change.operation, by: change.by, reason: change.reason, what, more: 0, ...found })
+    const key = batch ?? operation
+    const change = { operation, by, reason, what, count: 1, alike: true, ...found }
+    const other = told.get(key)
+    told.set(key, other ? together(other, change) : change)
   }
   return [...told.values()]
+}
+
+/** Two changes made together as one: the first speaks, of a corner only where both are of it. */
+function together(first: ToldChange, other: ToldChange): ToldChange {
+  const same = first.thing.kind === other.thing.kind && first.what.deed === other.what.deed
+  const inOneCorner = first.corner?.number === other.corner?.number
+  return {
+    ...first,
+    corner: inOneCorner ? first.corner : null,
+    reason: first.reason === other.reason ? first.reason : null,
+    count: first.count + 1,
+    alike: first.alike && same,
+  }
 }
 
 type Known = Pick<ToldChange, 'corner' | 'thing'>
@@ -103,7 +117,10 @@ const cornerOf = ({ number, name, direction }: { number: string; name: string; d
 /** Kinds of which the making goes without saying. */
 const SILENT: readonly TargetKind[] = ['card', 'condition', 'corner', 'book', 'layout']
 
-function deedOf({ target, set, undoes }: LoggedChange, frame: LapFrame): Deed | null {
+function deedOf(
+  { target, set, undoes }: Pick<LoggedChange, 'target' | 'set' | 'undoes'>,
+  frame: LapFrame,
+): Deed | null {
   if (undoes) return { deed: 'undone' }
   if (set.state) return stateDeed(target.kind, set.state)
   for (const ground of GROUNDS) {

@@ -3,21 +3,38 @@ import type { Ground, Manner } from '~/book/kinds'
 import type { Json } from '~/book/operation'
 import { type Metres, metresPerSecond } from '~/track/units'
 import { mannerWord, markKind } from './kinds'
-import { formatGear, formatMetres, formatNumber, formatSpeed } from './measures'
+import { count, formatGear, formatMetres, formatNumber, formatSpeed } from './measures'
 
-/** A change in words, without its corner and without who made it: "Build to moved 9 m sooner on the real track". */
-export function changeWords({ thing, what, reason, more }: ToldChange): string {
-  const said = `${thingWords(thing)} ${deedWords(what)}`.trim()
+/** A change in words, without its corner and without who made it: "build to moved 9 m sooner on the real track". */
+export function changeWords(told: ToldChange): string {
+  const { thing, what, reason, count: number, alike } = told
   const why = reason ? `: ${reason}` : ''
-  return `${said}${why}${more > 0 ? `, and ${formatNumber(more)} more` : ''}`
+  if (number > 1 && alike) return `${count(number, ...KINDS[thing.kind])} ${deedsWords(what)}${why}`
+  const more = number > 1 ? `, and ${formatNumber(number - 1)} more` : ''
+  return `${thingWords(told)} ${deedWords(what)}${why}${more}`
+}
+
+const KINDS: Record<ToldChange['thing']['kind'], [one: string, many?: string]> = {
+  mark: ['mark'],
+  landmark: ['landmark'],
+  stretch: ['stretch', 'stretches'],
+  condition: ['condition'],
+  card: ['card'],
+  corner: ['corner'],
+  book: ['book'],
+  layout: ['layout'],
 }
 
 const THINGS = { card: 'card', corner: 'corner', book: 'book', layout: 'layout' } as const
 
-function thingWords(thing: ToldChange['thing']): string {
-  if (thing.kind === 'mark') return markKind(thing.mark, thing.role, thing.gear)
+function thingWords({ thing }: ToldChange): string {
+  if (thing.kind === 'mark') return markKind(thing.mark, thing.role, thing.gear).toLowerCase()
   return 'name' in thing ? thing.name : THINGS[thing.kind]
 }
+
+/** What was done to several things: a distance, a value would be one thing's only. */
+const deedsWords = (what: Deed): string =>
+  what.deed === 'moved' ? `moved ${WHERE[what.ground]}` : what.deed === 'set' ? 'rewritten' : deedWords(what)
 
 const WHERE: Record<Ground, string> = { sim: 'in the simulator', real: 'on the real track' }
 

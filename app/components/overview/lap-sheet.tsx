@@ -34,13 +34,11 @@ interface LapSheetProps {
 }
 
 /** The whole circuit: its map, and below it the heights of one lap. */
-export function LapSheet({ sheet, ...lap }: LapSheetProps) {
-  const [ref, measured] = useSheetWidth(sheet)
-  const width = useDeferredValue(measured)
+export function LapSheet(props: LapSheetProps) {
   return (
-    <div ref={ref} className="lap-sheet">
+    <div className="lap-sheet">
       <Suspense fallback={<Waiting />}>
-        <LapDrawings {...lap} width={width} />
+        <LapDrawings {...props} />
       </Suspense>
     </div>
   )
@@ -50,8 +48,11 @@ export function LapSheet({ sheet, ...lap }: LapSheetProps) {
 const mapHeight = (width: number) => Math.round(width * (width < 600 ? 0.88 : 656 / 956))
 const heightsHeight = (width: number) => (width < 600 ? 150 : 191)
 
-function LapDrawings({ overview, team, search, width }: Omit<LapSheetProps, 'sheet'> & { width: number }) {
+/** Measures itself: a width that came from outside would take the server's drawing away before the geometry is there. */
+function LapDrawings({ overview, team, search, sheet }: LapSheetProps) {
   const { layout } = overview
+  const [ref, measured] = useSheetWidth(sheet)
+  const width = useDeferredValue(measured)
   const centreline = useCentreline(team, layout.centreline)
   const collection = useGround(team, layout.ground)
   const { startAlong, reversed, roadWidth } = layout
@@ -62,10 +63,10 @@ function LapDrawings({ overview, team, search, width }: Omit<LapSheetProps, 'she
   const ground = useMemo(() => readGround(collection, centreline.plane), [collection, centreline])
   const corners = useMemo(() => linkedCorners(overview, team, search), [overview, team, search])
   return (
-    <>
+    <div ref={ref}>
       <MapDrawing {...{ overview, road, ground, corners, width }} />
       <HeightsDrawing {...{ road, corners, width }} />
-    </>
+    </div>
   )
 }
 

@@ -36,7 +36,7 @@ export async function loader({ request, url, context }: Route.LoaderArgs): Promi
     readNames(db, actor),
     layOutGeometry(context, actor, view.layout),
   ])
-  const latest = [...ofBook, ...ofLayout].sort((a, b) => b.at - a.at)
+  const logs = [ofBook, ofLayout].map((changes) => ({ changes, goesOn: changes.length === LOOKED_THROUGH }))
   const dry = view.conditions.find((one) => one.kind === 'dry')?.id
   return {
     team: team.slug,
@@ -45,7 +45,7 @@ export async function loader({ request, url, context }: Route.LoaderArgs): Promi
     condition,
     search: condition === dry ? '' : `?${new URLSearchParams({ condition })}`,
     missing: missingOf(view, condition),
-    changes: changeLines(latest, view, names).slice(0, TOLD),
+    changes: changeLines(logs, view, names, TOLD),
     may: { addMarks: may(actor, 'mark.add', { archived: view.book.archived }).ok },
     sheet: sheetWidth(request),
   }
