@@ -10,17 +10,21 @@ import { ensureDependencies } from './dependencies.mjs'
 import { alone, atEnd, joinRuns, leaveRuns } from './lifetime.mjs'
 import { makeFolders, root, stateFolder } from './places.mjs'
 import { secrets } from './secrets.mjs'
-import { Stop, step } from './steps.mjs'
+import { knownReason, Stop, step } from './steps.mjs'
 
 const leastSpace = 300_000_000
 
 /** Makes the folders and checks that there is room in them. @throws {Stop} */
 export function prepareFolders() {
-  for (const folder of [root, join(stateFolder, '..')]) {
+  try {
+    makeFolders()
+  } catch (error) {
+    throw new Stop(`${error.path} cannot be made: ${knownReason(error.message) ?? error.code}`)
+  }
+  for (const folder of [root, stateFolder]) {
     const { bavail, bsize } = statfsSync(folder)
     if (bavail * bsize < leastSpace) throw new Stop(`The disk is full: less than 300 MB are free at ${folder}.`)
   }
-  makeFolders()
 }
 
 /** Installs what is missing. */
