@@ -13,6 +13,14 @@ export default [
       route('corners/:number', 'routes/book/corner.tsx'),
       route('corners/:number.geojson', 'routes/book/corner-geojson.ts'),
     ]),
-    layout('routes/team/layout.tsx', [index('routes/team/home.tsx'), route('cars', 'routes/team/cars.tsx')]),
+    layout('routes/team/layout.tsx', [
+      index('routes/team/home.tsx'),
+      route('books', 'routes/team/books.tsx'),
+      route('books/new', 'routes/team/new-book.tsx'),
+      route('circuits', 'routes/team/circuits.tsx'),
+      route('circuits/import', 'routes/team/import.tsx'),
+      route('circuits/import/:draft', 'routes/team/import-draft.tsx'),
+      route('cars', 'routes/team/cars.tsx'),
+    ]),
   ]),
 ] satisfies RouteConfig

@@ -17,8 +17,6 @@ export const teamWords = {
   noCircuit: 'No circuit yet.',
   noCircuitQuestion: 'Have you a lap of it, or its centreline, as a file?',
   bringIn: 'Bring a circuit in',
-  changes: 'Latest changes',
-  noChanges: 'Nothing has changed yet.',
-  archived: 'Archived',
+  inBook: (book: string) => `Open ${book}`,
   deskOnly: 'Coaches and managers do this.',
 } as const

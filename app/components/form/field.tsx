@@ -7,9 +7,11 @@ interface Labelled {
   field: FieldMetadata<unknown>
   label: string
   hint?: string
+  /** The form shows this field's errors in a place of their own. */
+  ownErrors?: boolean
 }
 
-function Frame({ field, label, hint, children }: Labelled & { children: ReactNode }) {
+function Frame({ field, label, hint, ownErrors, children }: Labelled & { children: ReactNode }) {
   return (
     <div>
       <label className="field" htmlFor={field.id}>
@@ -21,7 +23,7 @@ function Frame({ field, label, hint, children }: Labelled & { children: ReactNod
           {hint}
         </span>
       )}
-      <FieldErrors id={field.errorId} errors={field.errors} />
+      {!ownErrors && <FieldErrors id={field.errorId} errors={field.errors} />}
     </div>
   )
 }
@@ -45,11 +47,12 @@ export function TextField({
   hint,
   type = 'text',
   className = '',
+  ownErrors,
   ...rest
 }: Labelled & Typed & { type?: 'text' | 'email' | 'password'; className?: string }) {
   const { key, ...input } = getInputProps(field, { type, ariaDescribedBy: hint ? field.descriptionId : undefined })
   return (
-    <Frame field={field} label={label} hint={hint}>
+    <Frame field={field} label={label} hint={hint} ownErrors={ownErrors}>
       <input key={key} {...input} className={`input ${className}`} {...rest} />
     </Frame>
   )

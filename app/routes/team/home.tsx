@@ -1,4 +1,15 @@
-import { PageBody, PageHead } from '~/components/frame/page-frame'
+import type { RouterContextProvider } from 'react-router'
+import { may } from '~/book/may'
+import { bookLines } from '~/components/book/book-lines'
+import { changeLines } from '~/components/overview/change-lines'
+import { TeamHome, type TeamHomeData } from '~/components/team/team-home'
+import { readBook } from '~/db/read-book.server'
+import { type BookEntry, readBooks } from '~/db/read-books.server'
+import { readChanges } from '~/db/read-changes.server'
+import { readCircuits } from '~/db/read-circuits.server'
+import { readNames } from '~/db/read-team.server'
+import { dbContext } from '~/middleware/context'
+import { layOutCentreline } from '~/middleware/lay-out-geometry.server'
 import { allow } from '~/middleware/refusal.server'
 import { teamContext } from '~/middleware/team.server'
 import { pageTitle } from '~/words/titles'
@@ -6,16 +17,44 @@ import type { Route } from './+types/home'
 
 export const meta: Route.MetaFunction = ({ loaderData }) => [{ title: pageTitle(loaderData?.team.name ?? '') }]
 
-export function loader({ context }: Route.LoaderArgs) {
+export async function loader({ context }: Route.LoaderArgs): Promise<TeamHomeData> {
   const { actor, team } = context.get(teamContext)
   allow(actor, 'team.read')
-  return { team: { name: team.name } }
+  const db = context.get(dbContext)
+  const [books, circuits] = await Promise.all([readBooks(db, actor), readCircuits(db, actor)])
+  await Promise.all(circuits.map(({ layout }) => layOutCentreline(context, actor, layout.centreline)))
+  return {
+    team: { slug: team.slug, name: team.name },
+    books: bookLines(books, new Date().toISOString()),
+    circuits: circuits.map(({ slug, name, layout, corners, books }) => ({ slug, name, layout, corners, books })),
+    changes: await latestChanges(context, books),
+    may: { makeBook: may(actor, 'book.make').ok, bringIn: may(actor, 'circuit.change').ok },
+  }
 }
 
-export default function TeamHome({ loaderData: { team } }: Route.ComponentProps) {
-  return (
-    <PageBody>
-      <PageHead title={team.name} />
-    </PageBody>
-  )
+/** Lines of the log that are looked through, and how many of them the page tells. */
+const LOOKED_THROUGH = 60
+const TOLD = 8
+
+/** The latest changes of the book that was changed last. */
+async function latestChanges(
+  context: Readonly<RouterContextProvider>,
+  books: readonly BookEntry[],
+): Promise<TeamHomeData['changes']> {
+  const { actor } = context.get(teamContext)
+  const db = context.get(dbContext)
+  const latest = books.reduce<BookEntry | null>((a, b) => (a && a.changedAt >= b.changedAt ? a : b), null)
+  const view = latest && (await readBook(db, actor, latest.slug))
+  if (!view) return null
+  const [ofBook, ofLayout, names] = await Promise.all([
+    readChanges(db, actor, { book: view.book.id, limit: LOOKED_THROUGH }),
+    readChanges(db, actor, { layout: view.layout.id, limit: LOOKED_THROUGH }),
+    readNames(db, actor),
+  ])
+  const logs = [ofBook, ofLayout].map((changes) => ({ changes, goesOn: changes.length === LOOKED_THROUGH }))
+  return { book: view.book.name, slug: view.book.slug, lines: changeLines(logs, view, names, TOLD) }
+}
+
+export default function Home({ loaderData }: Route.ComponentProps) {
+  return <TeamHome {...loaderData} />
 }
