@@ -4,7 +4,7 @@ import pg from 'pg'
 import { grantRights } from './rights'
 
 /** Any number that nothing else locks by. */
-const MIGRATION_LOCK = 7_140_021
+export const MIGRATION_LOCK = 7_140_021
 
 /**
  * Brings the tables up to date and sets the app's rights. Two at once wait for each other by an advisory lock, since the
