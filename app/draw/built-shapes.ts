@@ -1,10 +1,10 @@
-import { linePath, type Point, path, polygon, type Shape } from '~/draw/display-list'
+import { isTip, linePath, type Point, path, polygon, type Shape, smoothRing } from '~/draw/display-list'
 import type { GroundFeature, GroundKind } from '~/draw/ground'
 import { dotRows, hatchLines, longAxis, marshTufts } from '~/draw/hatch'
 import { boundsOf, clipRing, insideRing, overlap, simplifyRing } from '~/draw/lines'
 import { type Projection, sheetBox } from '~/draw/projection'
+import { mastShapes } from '~/draw/side-things'
 import type { StyleKey } from '~/draw/style-keys'
-import type { PlanePoint } from '~/track/plane'
 
 const BORDER = 12
 const DOT_SPACING = 7
@@ -23,13 +23,13 @@ export function builtShapes(features: readonly GroundFeature[], projection: Proj
     ...rings('marsh').flatMap(marsh),
     ...joined('groyne', lines('groyne')),
     ...cased('stone', lines('breakwater'), WIDTHS.breakwater, projection),
-    ...gravel(rings('gravel')),
+    ...gravel(rings('gravel'), projection.detail),
     ...rings('paddock').flatMap((ring) => [polygon('paddock', ring), ...stalls(ring, projection)]),
     ...cased('lane', lines('lane'), WIDTHS.lane, projection),
     ...cased('pit-lane', lines('pit-lane'), WIDTHS.pitLane, projection),
     ...rings('grandstand').flatMap(grandstand),
     ...buildings(rings('building', 'pit-building')),
-    ...pointsOf(features, 'mast', projection).flatMap(mast),
+    ...pointsOf(features, 'mast', projection).flatMap(mastShapes),
   ]
 }
 
@@ -58,17 +58,12 @@ function linesOf(features: readonly GroundFeature[], kind: GroundKind, projectio
     .filter((line) => overlap(boundsOf(line), box))
 }
 
-function pointsOf(features: readonly GroundFeature[], kind: GroundKind, projection: Projection): PlanePoint[] {
+function pointsOf(features: readonly GroundFeature[], kind: GroundKind, projection: Projection): Point[] {
   const box = sheetBox(projection, BORDER)
-  const shown = (point: PlanePoint) => {
-    const [x, y] = projection.toPx(point)
-    return overlap({ x, y, width: 0, height: 0 }, box)
-  }
-  const points = features.filter((feature) => feature.kind === kind).flatMap((feature) => feature.points)
-  return points.filter(shown).map((point) => {
-    const [x, y] = projection.toPx(point)
-    return { x, y }
-  })
+  return features
+    .filter((feature) => feature.kind === kind)
+    .flatMap(({ points }) => points.map(projection.toPx))
+    .filter(([x, y]) => overlap({ x, y, width: 0, height: 0 }, box))
 }
 
 function marsh(ring: Point[]): Shape[] {
@@ -76,9 +71,10 @@ function marsh(ring: Point[]): Shape[] {
   return blades === '' ? [] : [path('marsh-water', water), path('marsh-tuft', blades)]
 }
 
-function gravel(rings: readonly Point[][]): Shape[] {
+function gravel(rings: readonly Point[][], detail: boolean): Shape[] {
   const dots = rings.map((ring) => dotRows(ring, DOT_SPACING)).join('')
-  return [...rings.map((ring) => polygon('gravel', ring)), ...(dots === '' ? [] : [path('gravel-dots', dots)])]
+  const areas = rings.map((ring) => (detail ? smoothRing(ring, isTip) : linePath(ring, true))).join('')
+  return [...(areas === '' ? [] : [path('gravel', areas)]), ...(dots === '' ? [] : [path('gravel-dots', dots)])]
 }
 
 const joined = (style: StyleKey, lines: readonly Point[][]): Shape[] =>
@@ -103,15 +99,6 @@ function grandstand(ring: Point[]): Shape[] {
 
 const buildings = (rings: readonly Point[][]): Shape[] =>
   rings.length === 0 ? [] : [path('building', rings.map((ring) => linePath(ring, true)).join(''))]
-
-function mast({ x, y }: PlanePoint): Shape[] {
-  const body: Point[] = [
-    [x, y - 9],
-    [x - 5, y + 5],
-    [x + 5, y + 5],
-  ]
-  return [polygon('mast', body), { type: 'circle', style: 'mast-foot', x: body[0]![0], y, r: 1.4 }]
-}
 
 /** Parked transporters: two rows along a paddock's longer side, in metres of their own length and spacing. */
 const ROWS = [

@@ -158,24 +158,43 @@ export function linePath(points: readonly Point[], closed = false): string {
   return `M${points.map(at).join('L')}${closed ? 'Z' : ''}`
 }
 
+const middleOf = ([x1, y1]: Point, [x2, y2]: Point): Point => [(x1 + x2) / 2, (y1 + y2) / 2]
+
 /**
- * Path data that rounds every corner: a quadratic arc with the corner as control point, from middle to middle of the
- * sides. The ends of an open line are kept.
+ * Path data that rounds every corner of a line: a quadratic arc with the corner as control point, from middle to middle of
+ * the sides. The ends are kept.
  */
-export function smoothPath(points: readonly Point[], closed = false): string {
-  if (points.length < 3) return linePath(points, closed)
-  const middle = ([x1, y1]: Point, [x2, y2]: Point): Point => [(x1 + x2) / 2, (y1 + y2) / 2]
-  if (closed) {
-    const last = points.at(-1)!
-    const arcs = points.map((point, i) => `Q${at(point)} ${at(middle(point, points[(i + 1) % points.length]!))}`)
-    return `M${at(middle(last, points[0]!))}${arcs.join('')}Z`
-  }
+export function smoothLine(points: readonly Point[]): string {
+  if (points.length < 3) return linePath(points)
   const inner = points.slice(1, -1)
   const arcs = inner.map((point, i) => {
-    const end = i === inner.length - 1 ? points.at(-1)! : middle(point, inner[i + 1]!)
+    const end = i === inner.length - 1 ? points.at(-1)! : middleOf(point, inner[i + 1]!)
     return `Q${at(point)} ${at(end)}`
   })
   return `M${at(points[0]!)}${arcs.join('')}`
+}
+
+/**
+ * The same for a ring, but for the corners that are to stay: a picture's edge, a sharp tip.
+ * @param stays asked of each corner with the one before and the one after
+ */
+export function smoothRing(
+  ring: readonly Point[],
+  stays: (corner: Point, before: Point, after: Point) => boolean = () => false,
+): string {
+  if (ring.length < 3) return linePath(ring, true)
+  const arcs = ring.map((point, i) => {
+    const after = ring[(i + 1) % ring.length]!
+    const end = at(middleOf(point, after))
+    return stays(point, ring.at(i - 1)!, after) ? `L${at(point)}L${end}` : `Q${at(point)} ${end}`
+  })
+  return `M${at(middleOf(ring.at(-1)!, ring[0]!))}${arcs.join('')}Z`
+}
+
+/** Whether a ring turns by more than 50° at a corner: a tip to keep. */
+export function isTip([x, y]: Point, [bx, by]: Point, [ax, ay]: Point): boolean {
+  const [ux, uy, vx, vy] = [x - bx, y - by, ax - x, ay - y]
+  return ux * vx + uy * vy < 0.64 * Math.hypot(ux, uy) * Math.hypot(vx, vy)
 }
 
 /** Every shape of a list, groups opened, in the order of paint. */

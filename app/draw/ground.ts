@@ -34,22 +34,30 @@ export interface GroundFeature {
 
 const isKind = (value: unknown): value is GroundKind => (GROUND_KINDS as readonly unknown[]).includes(value)
 
+/** Read once for each collection and plane: both are immutable, and a page draws from them many times. */
+const read = new WeakMap<FeatureCollection, { plane: Plane; features: GroundFeature[] }>()
+
 /**
  * The ground of a layout in its plane. Features of an unknown `properties.kind`, and geometry collections, are left out.
  * @param collection WGS 84, RFC 7946 axis order; null where a layout has no ground
  */
-export function readGround(collection: FeatureCollection | null, plane: Plane): GroundFeature[] {
-  return (collection?.features ?? []).flatMap((feature) => {
+export function readGround(collection: FeatureCollection | null, plane: Plane): readonly GroundFeature[] {
+  if (!collection) return []
+  const known = read.get(collection)
+  if (known?.plane === plane) return known.features
+  const features = collection.features.flatMap((feature) => {
     const kind = feature.properties?.kind
     return isKind(kind) ? [inPlane(feature, kind, plane)] : []
   })
+  read.set(collection, { plane, features })
+  return features
 }
 
 function inPlane(feature: Feature, kind: GroundKind, plane: Plane): GroundFeature {
   const { name, height } = feature.properties ?? {}
   const line = (positions: GeoPosition[]) => positions.map(([lng, lat]) => plane.toPlane([lng!, lat!]))
   const ring = (positions: GeoPosition[]) => line(positions.slice(0, -1))
-  const read: GroundFeature = {
+  const inside: GroundFeature = {
     kind,
     name: typeof name === 'string' ? name : null,
     height: typeof height === 'number' ? height : null,
@@ -58,13 +66,13 @@ function inPlane(feature: Feature, kind: GroundKind, plane: Plane): GroundFeatur
     points: [],
   }
   const { geometry } = feature
-  if (geometry.type === 'Polygon') read.rings = geometry.coordinates.map(ring)
-  if (geometry.type === 'MultiPolygon') read.rings = geometry.coordinates.flat().map(ring)
-  if (geometry.type === 'LineString') read.lines = [line(geometry.coordinates)]
-  if (geometry.type === 'MultiLineString') read.lines = geometry.coordinates.map(line)
-  if (geometry.type === 'Point') read.points = line([geometry.coordinates])
-  if (geometry.type === 'MultiPoint') read.points = line(geometry.coordinates)
-  return read
+  if (geometry.type === 'Polygon') inside.rings = geometry.coordinates.map(ring)
+  if (geometry.type === 'MultiPolygon') inside.rings = geometry.coordinates.flat().map(ring)
+  if (geometry.type === 'LineString') inside.lines = [line(geometry.coordinates)]
+  if (geometry.type === 'MultiLineString') inside.lines = geometry.coordinates.map(line)
+  if (geometry.type === 'Point') inside.points = line([geometry.coordinates])
+  if (geometry.type === 'MultiPoint') inside.points = line(geometry.coordinates)
+  return inside
 }
 
 /** Metres between one contour and the next; null where there are none, or one alone. */

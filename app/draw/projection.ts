@@ -6,11 +6,16 @@ export interface Projection {
   readonly pxPerMetre: number
   readonly width: number
   readonly height: number
+  /** The road as light asphalt with things on it, instead of a dark band. */
+  readonly detail: boolean
   /** What is in the middle of the picture. */
   readonly middle: PlanePoint
   toPx(point: PlanePoint): Point
   toPlane(point: Point): PlanePoint
 }
+
+/** From this scale on a picture shows detail, unless it is told otherwise. */
+export const DETAIL_FROM = 1
 
 /** The projection that shows `middle` in the middle of a picture. */
 export function makeProjection(view: {
@@ -18,10 +23,15 @@ export function makeProjection(view: {
   pxPerMetre: number
   width: number
   height: number
+  detail?: boolean
 }): Projection {
-  const { middle, pxPerMetre, width, height } = view
+  const { middle, pxPerMetre, width, height, detail = pxPerMetre >= DETAIL_FROM } = view
   return {
-    ...view,
+    middle,
+    pxPerMetre,
+    width,
+    height,
+    detail,
     toPx: ({ x, y }) => [width / 2 + (x - middle.x) * pxPerMetre, height / 2 - (y - middle.y) * pxPerMetre],
     toPlane: ([x, y]) => ({
       x: middle.x + (x - width / 2) / pxPerMetre,
@@ -36,9 +46,9 @@ export function makeProjection(view: {
  */
 export function fitProjection(
   points: readonly PlanePoint[],
-  sheet: { width: number; height: number; margin: number; bottom?: number; most?: number },
+  sheet: { width: number; height: number; margin: number; bottom?: number; most?: number; detail?: boolean },
 ): Projection {
-  const { width, height, margin, bottom = 0, most = 20 } = sheet
+  const { width, height, margin, bottom = 0, most = 20, detail } = sheet
   const west = Math.min(...points.map((point) => point.x))
   const east = Math.max(...points.map((point) => point.x))
   const south = Math.min(...points.map((point) => point.y))
@@ -46,7 +56,7 @@ export function fitProjection(
   const room = { x: Math.max(width - 2 * margin, 1), y: Math.max(height - 2 * margin - bottom, 1) }
   const pxPerMetre = Math.min(room.x / (east - west), room.y / (north - south), most)
   const middle = { x: (west + east) / 2, y: (south + north) / 2 - bottom / 2 / pxPerMetre }
-  return makeProjection({ middle, pxPerMetre, width, height })
+  return makeProjection({ middle, pxPerMetre, width, height, ...(detail === undefined ? {} : { detail }) })
 }
 
 /** The picture with a border of `by` px on every side. */

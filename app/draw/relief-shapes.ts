@@ -1,6 +1,6 @@
-import { linePath, type Point, path, polygon, rect, type Shape, smoothPath } from '~/draw/display-list'
+import { type Point, path, rect, type Shape, smoothLine, smoothRing } from '~/draw/display-list'
 import { type GroundFeature, isClosed, type Water } from '~/draw/ground'
-import { boundsOf, clipLine, clipRing, overlap, simplifyLine, simplifyRing } from '~/draw/lines'
+import { clipLine, clipRing, simplifyLine, simplifyRing } from '~/draw/lines'
 import { type Projection, sheetBox } from '~/draw/projection'
 import type { StyleKey } from '~/draw/style-keys'
 import { parallelLine, WATER_LINES } from '~/draw/water-lines'
@@ -9,6 +9,8 @@ import type { PlanePoint } from '~/track/plane'
 /** Contours every 5 m; every 25 m a heavier one. */
 const HEAVY_EVERY = 25
 const BORDER = 12
+/** px by which a thinned line may leave the given one. */
+const TOLERANCE = 0.5
 const WATER_STYLES: readonly StyleKey[] = [
   'water-line-1',
   'water-line-2',
@@ -17,25 +19,46 @@ const WATER_STYLES: readonly StyleKey[] = [
   'water-line-5',
 ]
 
+/** Whether anything of a line may come within `border` px of the picture. */
+function comesNear(line: readonly PlanePoint[], projection: Projection, border: number): boolean {
+  const reachX = (projection.width / 2 + border) / projection.pxPerMetre
+  const reachY = (projection.height / 2 + border) / projection.pxPerMetre
+  const { middle } = projection
+  let [west, east, south, north] = [true, true, true, true]
+  for (const { x, y } of line) {
+    west &&= x < middle.x - reachX
+    east &&= x > middle.x + reachX
+    south &&= y < middle.y - reachY
+    north &&= y > middle.y + reachY
+    if (!west && !east && !south && !north) return true
+  }
+  return false
+}
+
 /** Lines in px that come near the picture, cut to it and thinned. */
 function linesIn(lines: readonly (readonly PlanePoint[])[], projection: Projection, border: number): Point[][] {
   const box = sheetBox(projection, border)
-  return lines.flatMap((line) => {
-    const points = line.map(projection.toPx)
-    if (!overlap(boundsOf(points), box)) return []
-    return clipLine(points, box).map((piece) => simplifyLine(piece, 0.6))
-  })
+  return lines
+    .filter((line) => comesNear(line, projection, border))
+    .flatMap((line) => clipLine(line.map(projection.toPx), box).map((piece) => simplifyLine(piece, TOLERANCE)))
 }
 
 /** Rings in px that come near the picture, cut to it and thinned. */
 function ringsIn(rings: readonly (readonly PlanePoint[])[], projection: Projection, border: number): Point[][] {
   const box = sheetBox(projection, border)
-  return rings.flatMap((ring) => {
-    const points = ring.map(projection.toPx)
-    if (!overlap(boundsOf(points), box)) return []
-    const cut = clipRing(points, box)
-    return cut.length < 3 ? [] : [simplifyRing(cut, 0.6)]
-  })
+  return rings
+    .filter((ring) => comesNear(ring, projection, border))
+    .map((ring) => clipRing(ring.map(projection.toPx), box))
+    .filter((cut) => cut.length > 2)
+    .map((cut) => simplifyRing(cut, TOLERANCE))
+}
+
+/** Corners that come from cutting at the picture's border are not rounded. */
+function onBorder(projection: Projection, border: number): (corner: Point) => boolean {
+  const box = sheetBox(projection, border)
+  const right = box.x + box.width
+  const bottom = box.y + box.height
+  return ([x, y]) => x <= box.x || x >= right || y <= box.y || y >= bottom
 }
 
 /** Paper, the tint of the lowest contour, the contours. */
@@ -48,12 +71,10 @@ export function reliefShapes(features: readonly GroundFeature[], projection: Pro
     .flatMap(({ rings, lines }) => [...rings, ...lines.filter(isClosed)])
   const isHeavy = ({ height }: GroundFeature) => height! % HEAVY_EVERY === 0
   const drawn = (style: StyleKey, some: readonly GroundFeature[]) => {
-    const d = linesIn(some.flatMap(linesOf), projection, BORDER)
-      .map((line) => smoothPath(line))
-      .join('')
+    const d = linesIn(some.flatMap(linesOf), projection, BORDER).map(smoothLine).join('')
     return d === '' ? [] : [path(style, d)]
   }
-  const tint = ringsIn(tinted, projection, BORDER).map((ring) => smoothPath(ring, true))
+  const tint = ringsIn(tinted, projection, BORDER).map((ring) => smoothRing(ring, onBorder(projection, BORDER)))
   return [
     rect('paper', sheetBox(projection)),
     ...(tint.length === 0 ? [] : [path('tint', tint.join(''))]),
@@ -81,12 +102,16 @@ export function waterShapes(waters: readonly Water[], projection: Projection): S
   const waterLines = WATER_LINES.flatMap((distance, i) => {
     const d = shores
       .flatMap(({ shore, side }) => parallelLine(shore, distance, side))
-      .map((line) => smoothPath(simplifyLine(line, 0.4)))
+      .map((line) => smoothLine(simplifyLine(line, 0.4)))
       .join('')
     return d === '' ? [] : [path(WATER_STYLES[i]!, d)]
   })
-  const coast = shores.map(({ shore }) => linePath(shore)).join('')
-  return [...areas.map((area) => polygon('sea', area)), ...waterLines, ...(coast === '' ? [] : [path('coast', coast)])]
+  const coast = shores.map(({ shore }) => smoothLine(shore)).join('')
+  return [
+    ...areas.map((area) => path('sea', smoothRing(area, onBorder(projection, BORDER)))),
+    ...waterLines,
+    ...(coast === '' ? [] : [path('coast', coast)]),
+  ]
 }
 
 /** A ring walked clockwise (y north) has its inside on the right. */

@@ -5,32 +5,35 @@ import { type Projection, sheetBox } from '~/draw/projection'
 import type { Road } from '~/draw/road'
 import { type Station, station } from '~/track/units'
 
-/** From this scale on the road is light asphalt with marks on it; below it a dark band. */
-export const DETAIL_FROM = 1
 /** px of the dark band where the true width would be thinner: on a wide sheet, on a narrow one. */
 const BAND_LEAST = { wide: 8.5, narrow: 5.5 } as const
 const NARROW = 600
 const CASING = 2.2
 
 /** How wide the road is drawn, px. */
-export function drawnWidth(road: Road, { pxPerMetre, width }: Projection): number {
+export function drawnWidth(road: Road, { pxPerMetre, width, detail }: Projection): number {
   const least = width < NARROW ? BAND_LEAST.narrow : BAND_LEAST.wide
-  return pxPerMetre >= DETAIL_FROM ? road.width * pxPerMetre : Math.max(road.width * pxPerMetre, least)
+  return detail ? road.width * pxPerMetre : Math.max(road.width * pxPerMetre, least)
 }
 
 /** The road of the whole lap in px, thinned; first point repeated at the end. */
 export const lapLine = (road: Road, projection: Projection): Point[] =>
-  simplifyLine(road.lap().map(projection.toPx), projection.pxPerMetre >= DETAIL_FROM ? 0.15 : 0.3)
+  simplifyLine(road.lap().map(projection.toPx), projection.detail ? 0.15 : 0.3)
+
+/** The pieces of the road that come within `border` px of the picture, thinned. */
+export const roadPieces = (road: Road, projection: Projection, border: number): Point[][] =>
+  clipLine(road.lap().map(projection.toPx), sheetBox(projection, border)).map((piece) => simplifyLine(piece, 0.15))
 
 /** The road: a dark band with a paper casing, or light asphalt between two edges. */
 export function roadShapes(road: Road, projection: Projection): Shape[] {
   const width = drawnWidth(road, projection)
-  const line = lapLine(road, projection)
-  if (projection.pxPerMetre < DETAIL_FROM) {
+  if (!projection.detail) {
+    const line = lapLine(road, projection)
     return [polyline('road-casing', line, width + 2 * CASING), polyline('road', line, width)]
   }
-  const pieces = clipLine(line, sheetBox(projection, width))
-  const d = pieces.map((piece) => linePath(piece)).join('')
+  const d = roadPieces(road, projection, width)
+    .map((piece) => linePath(piece))
+    .join('')
   return d === '' ? [] : [path('asphalt-edge', d, width + 2.6), path('asphalt', d, width)]
 }
 
@@ -48,7 +51,7 @@ const BLOCK_LENGTH = 3
  * the reader's choice of ground: pass the placements to show.
  */
 export function kerbShapes(placements: readonly PlacementView[], road: Road, projection: Projection): Shape[] {
-  const detail = projection.pxPerMetre >= DETAIL_FROM
+  const { detail } = projection
   const size = detail ? 'detail' : 'band'
   const box = sheetBox(projection, 20)
   const drawn = placements.flatMap((placement) => {
@@ -71,7 +74,7 @@ function kerbLine(placement: PlacementView, road: Road, projection: Projection, 
   const side = Math.sign(offset)
   const edge = drawnWidth(road, projection) / projection.pxPerMetre / 2
   // On the dark band a kerb sits astride the edge, else it begins at it.
-  const out = projection.pxPerMetre >= DETAIL_FROM ? width / 2 + 0.7 : 0.5
+  const out = projection.detail ? width / 2 + 0.7 : 0.5
   const line = road.stretch(from, until, side * (edge + out / projection.pxPerMetre))
   return line.map(projection.toPx)
 }

@@ -12,7 +12,7 @@ export interface Road {
   /** The road, or a line beside it, from one station forward to another: the ends and every vertex between. */
   stretch(from: Station, to: Station, offset?: number): PlanePoint[]
   /** The whole lap from the start line on, first point repeated at the end. */
-  lap(offset?: number): PlanePoint[]
+  lap(offset?: number): readonly PlanePoint[]
 }
 
 /** @param width of the road in metres, the same all the way round */
@@ -35,13 +35,19 @@ export function roadOf(frame: LayoutFrame, width: number): Road {
     }
     return points
   }
+  let middle: PlanePoint[] | null = null
+  const lap = (offset: number) => [...through(station(0), frame.length, offset), at(station(0), offset)]
   return {
     frame,
     width,
     at,
     headingAt: (value) => headingIn(at, value),
     stretch: (from, to, offset = 0) => [...through(from, frame.ahead(from, to), offset), at(to, offset)],
-    lap: (offset = 0) => [...through(station(0), frame.length, offset), at(station(0), offset)],
+    lap: (offset = 0) => {
+      if (offset !== 0) return lap(offset)
+      middle ??= lap(0)
+      return middle
+    },
   }
 }
 

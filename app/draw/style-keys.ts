@@ -84,15 +84,17 @@ const LANDMARKS = [
   'thing-sim',
   'wall',
   'wall-hatch',
+  'tyres-edge',
   'tyres',
   'bump',
   'standing-water',
   'standing-water-line',
   'drain',
+  'gantry-casing',
   'gantry',
 ] as const
 
-const READING = ['driven-line', 'aim', 'datum', 'selected', 'leader'] as const
+const READING = ['driven-line', 'aim', 'datum', 'selected', 'leader', 'bend', 'bend-end', 'way'] as const
 
 export type GlyphStyle = `mk-${MarkKind}`
 export type TetherStyle = `tether-${MarkKind}`

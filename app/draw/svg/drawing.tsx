@@ -2,6 +2,8 @@ import { type ElementType, memo, useId } from 'react'
 import { type DisplayList, eachShape, type GroupShape, type Shape, type TextShape } from '~/draw/display-list'
 import { GlyphMarks } from '~/draw/svg/glyph'
 import './drawing.css'
+import './drawing-things.css'
+import './drawing-marks.css'
 
 interface DrawingProps {
   list: DisplayList

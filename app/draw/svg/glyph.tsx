@@ -10,6 +10,8 @@ import {
 } from '~/draw/glyphs'
 import type { StyleKey } from '~/draw/style-keys'
 import './drawing.css'
+import './drawing-things.css'
+import './drawing-marks.css'
 
 interface GlyphMarksProps {
   kind: GlyphKind
