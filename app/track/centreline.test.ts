@@ -14,6 +14,7 @@ import {
 } from '~/track/centreline'
 import { makePlane } from '~/track/plane'
 import { type Offset, offset, type Position, type Station, station } from '~/track/units'
+import { evenly, shareOfLap as share } from '../../tests/support/arbitraries'
 import {
   evenPoints,
   figureEight,
@@ -35,8 +36,7 @@ const rectangle = makeCentreline(
     [-250, 200],
   ]),
 )
-const share = fc.integer({ min: 0, max: 999_999 }).map((millionth) => millionth / 1e6)
-const metresAside = (reach: number) => fc.double({ min: -reach, max: reach, noNaN: true }).map(offset)
+const metresAside = (reach: number) => evenly(-reach, reach).map(offset)
 
 const at = (line: Centreline, part: number): Station => station(part * line.length)
 

@@ -3,6 +3,7 @@ import { describe, expect, it } from 'vitest'
 import { locate, makeCentreline, signedGap, straightDistance } from '~/track/centreline'
 import { frameAsDrawn, makeFrame } from '~/track/layout-frame'
 import { along, type Position, station, offset as toOffset } from '~/track/units'
+import { evenly, shareOfLap as share } from '../../tests/support/arbitraries'
 import { nineCorners, sparsePoints, toPositions } from '../../tests/support/circuits'
 
 const positions = toPositions(sparsePoints(nineCorners, 19)).map(
@@ -10,8 +11,7 @@ const positions = toPositions(sparsePoints(nineCorners, 19)).map(
 )
 const line = makeCentreline(positions)
 
-const share = fc.integer({ min: 0, max: 999_999 }).map((millionth) => millionth / 1e6)
-const aside = fc.double({ min: -9, max: 9, noNaN: true }).map(toOffset)
+const aside = evenly(-9, 9).map(toOffset)
 const laps = fc.record({ start: share, reversed: fc.boolean() })
 const frameOf = ({ start, reversed }: { start: number; reversed: boolean }) =>
   makeFrame(line, { startAlong: along(start * line.length), reversed })

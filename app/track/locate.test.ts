@@ -1,7 +1,8 @@
 import * as fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { locate, makeCentreline, planePointAt, pointAt, signedGap } from '~/track/centreline'
+import { locate, makeCentreline, planePointAt, pointAt, signedGap, straightDistance } from '~/track/centreline'
 import { offset, station } from '~/track/units'
+import { evenly, shareOfLap as share } from '../../tests/support/arbitraries'
 import {
   evenPoints,
   figureEight,
@@ -20,24 +21,20 @@ const plain = makeCentreline(toPositions(sparsePoints(nineCorners, 11)))
 describe('without a hint', () => {
   it('the nearest part of the line is taken', () => {
     fc.assert(
-      fc.property(
-        fc.double({ min: -300, max: 1100, noNaN: true }),
-        fc.double({ min: -300, max: 900, noNaN: true }),
-        (x, y) => {
-          const point = { x: x - 400, y: y - 300 }
-          const found = locate(plain, plain.plane.toLngLat(point))
-          const foot = planePointAt(plain, found.station)
-          const ours = Math.abs(found.offset)
-          let least = Infinity
-          for (let s = 0; s < plain.length; s += 1) {
-            const there = planePointAt(plain, station(s))
-            least = Math.min(least, Math.hypot(there.x - point.x, there.y - point.y))
-          }
-          expect(ours).toBeLessThanOrEqual(least + 1e-6)
-          // The road lies there too: the foot of the ray is no further off than a slanting ray can be.
-          expect(Math.hypot(foot.x - point.x, foot.y - point.y)).toBeLessThan(2 * least + 40)
-        },
-      ),
+      fc.property(evenly(-300, 1100), evenly(-300, 900), (x, y) => {
+        const point = { x: x - 400, y: y - 300 }
+        const found = locate(plain, plain.plane.toLngLat(point))
+        const foot = planePointAt(plain, found.station)
+        const ours = Math.abs(found.offset)
+        let least = Infinity
+        for (let s = 0; s < plain.length; s += 1) {
+          const there = planePointAt(plain, station(s))
+          least = Math.min(least, Math.hypot(there.x - point.x, there.y - point.y))
+        }
+        expect(ours).toBeLessThanOrEqual(least + 1e-6)
+        // The road lies there too: the foot of the ray is no further off than a slanting ray can be.
+        expect(Math.hypot(foot.x - point.x, foot.y - point.y)).toBeLessThan(2 * least + 40)
+      }),
       { numRuns: 60 },
     )
   })
@@ -75,18 +72,15 @@ describe('with a hint', () => {
     }
   })
 
-  it('a hint on the wrong leg pulls no point off the road it lies on by more than 15 m', () => {
+  it('a hint on another part of the lap pulls no point off the road it lies on, 20 m from the next', () => {
     fc.assert(
-      fc.property(
-        fc.double({ min: 0, max: 1, noNaN: true }),
-        fc.double({ min: 0, max: 1, noNaN: true }),
-        fc.double({ min: -6, max: 6, noNaN: true }),
-        (part, elsewhere, aside) => {
-          const s = station(part * plain.length * 0.999)
-          const found = locate(plain, pointAt(plain, s, offset(aside)), station(elsewhere * plain.length))
-          expect(Math.abs(found.offset)).toBeLessThan(Math.abs(aside) + 15.001)
-        },
-      ),
+      fc.property(share, share, evenly(-2, 2), (part, elsewhere, aside) => {
+        const s = station(part * legs.length)
+        const point = pointAt(legs, s, offset(aside))
+        const found = locate(legs, point, station(elsewhere * legs.length))
+        expect(Math.abs(found.offset)).toBeLessThan(2.001)
+        expect(straightDistance(pointAt(legs, found.station, found.offset), point)).toBeLessThan(1e-6)
+      }),
     )
   })
 
@@ -99,7 +93,7 @@ describe('with a hint', () => {
 
   it('a hint far along the same road changes nothing', () => {
     fc.assert(
-      fc.property(fc.double({ min: 0, max: 1, noNaN: true }), (part) => {
+      fc.property(share, (part) => {
         const s = station(part * legs.length * 0.45)
         const point = pointAt(legs, s, offset(-3))
         expect(locate(legs, point, station(s + 60)).station).toBeCloseTo(locate(legs, point).station, 6)

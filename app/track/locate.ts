@@ -1,8 +1,8 @@
 import type { Centreline } from '~/track/centreline'
+import { wrap } from '~/track/lap-frame'
 import { runOfRay } from '~/track/offset-rays'
 import { nearestSegment } from '~/track/segment-grid'
 import { type LngLat, type Offset, offset, type Position, type Station, station } from '~/track/units'
-import { wrap } from './lap-frame'
 
 /** Where a point lies on a centreline: metres along it and metres to its left (+) or right (−). */
 export interface Location {

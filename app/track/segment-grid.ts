@@ -14,7 +14,7 @@ const leastCell = 25
 const mostCells = 65_536
 const nearRings = 8
 
-/** Calls `visit` with each cell that segment (ax, ay)–(bx, by) passes through, row by row; a cell at a border twice at most. */
+/** Calls `visit` with each cell that segment (ax, ay)–(bx, by) passes through, row by row, each once. */
 function eachCell(
   grid: Pick<SegmentGrid, 'cell' | 'x0' | 'y0' | 'columns' | 'rows'>,
   [ax, ay, bx, by]: readonly [number, number, number, number],
@@ -23,12 +23,11 @@ function eachCell(
   const column = (x: number) => Math.min(grid.columns - 1, Math.max(0, Math.floor((x - grid.x0) / grid.cell)))
   const row = (y: number) => Math.min(grid.rows - 1, Math.max(0, Math.floor((y - grid.y0) / grid.cell)))
   const [lowX, lowY, highX, highY] = ay <= by ? [ax, ay, bx, by] : [bx, by, ax, ay]
-  const slope = highY > lowY ? (highX - lowX) / (highY - lowY) : 0
+  const slope = (highX - lowX) / (highY - lowY)
   const xAt = (y: number) => (y <= lowY ? lowX : y >= highY ? highX : lowX + slope * (y - lowY))
   for (let r = row(lowY); r <= row(highY); r++) {
-    const level = highY === lowY
-    const enter = level ? lowX : xAt(grid.y0 + r * grid.cell)
-    const leave = level ? highX : xAt(grid.y0 + (r + 1) * grid.cell)
+    const enter = xAt(grid.y0 + r * grid.cell)
+    const leave = xAt(grid.y0 + (r + 1) * grid.cell)
     const last = column(Math.max(enter, leave))
     for (let c = column(Math.min(enter, leave)); c <= last; c++) visit(r * grid.columns + c)
   }
