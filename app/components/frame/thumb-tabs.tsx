@@ -19,7 +19,7 @@ export function ThumbTabs({ tabs, label }: { tabs: readonly ThumbTab[]; label: s
         <Link
           key={tab.to}
           to={tab.to}
-          className="tab"
+          className={/\d/.test(tab.label) ? 'tab' : 'tab tab-word'}
           aria-label={tab.name}
           aria-current={tab.here ? 'page' : undefined}
           preventScrollReset

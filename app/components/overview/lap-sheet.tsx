@@ -45,8 +45,8 @@ export function LapSheet(props: LapSheetProps) {
 }
 
 /** Height of the map for its width: a phone's is squarer. */
-const mapHeight = (width: number) => Math.round(width * (width < 600 ? 0.88 : 656 / 956))
-const heightsHeight = (width: number) => (width < 600 ? 150 : 191)
+const mapHeight = (width: number) => Math.round(width * (width < 600 ? 1 : 656 / 956))
+const heightsHeight = (width: number) => (width < 600 ? 176 : 191)
 
 /** Measures itself: a width that came from outside would take the server's drawing away before the geometry is there. */
 function LapDrawings({ overview, team, search, sheet }: LapSheetProps) {
