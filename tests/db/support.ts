@@ -105,7 +105,7 @@ export interface Book {
   layout: LayoutId
   scope: Scope
   layoutScope: Scope
-  corners: NewCorner[]
+  corners: readonly NewCorner[]
   view: BookView
   dry: string
   wet: string
