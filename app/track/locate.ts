@@ -71,10 +71,9 @@ function hintedSegment(line: Centreline, px: number, py: number, hint: number): 
   }
   look(home)
   for (const step of [1, line.count - 1]) {
-    let gap = 0
     for (let i = (home + step) % line.count; i !== home; i = (i + step) % line.count) {
       const near = step === 1 ? line.stations[i]! : line.stations[i + 1]!
-      gap = step === 1 ? wrap(near - hint, line.length) : wrap(hint - near, line.length)
+      const gap = step === 1 ? wrap(near - hint, line.length) : wrap(hint - near, line.length)
       if (gap > hintReach || gap * hintWeight >= least) break
       look(i)
     }
