@@ -23,6 +23,9 @@ export const streamTimeout = 5_000
 /** Milliseconds that the render has for sending those refusals. */
 const grace = 1_000
 
+/** Bytes from which a part that is ready is sent after the page around it: none, so that drawings show without JavaScript. */
+const progressiveChunkSize = Number.POSITIVE_INFINITY
+
 /** The only reporter of errors. Answers a route threw on purpose and requests given up by their sender are none. */
 export const handleError: HandleErrorFunction = (error, { request, context }) => {
   if (request.signal.aborted || isRouteErrorResponse(error) || error instanceof BodyTooLarge) return
@@ -65,6 +68,7 @@ export default function handleRequest(
       </NonceContext>,
       {
         nonce,
+        progressiveChunkSize,
         [whole ? 'onAllReady' : 'onShellReady']: begin,
         onShellError(error: unknown) {
           clearTimeout(timer)

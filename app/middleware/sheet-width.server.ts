@@ -1,5 +1,5 @@
 /** Widths in px of the drawing on a page's left side: a common screen's, and a common phone's beside the thumb tabs. */
-const DESK = 956
+const DESK = 955
 const PHONE = 342
 
 /**
