@@ -4,7 +4,7 @@ import { wrap } from '~/track/lap-frame'
 import { frameAsDrawn, type LayoutFrame } from '~/track/layout-frame'
 import { type Metres, metres, type PerMetre, perMetre, type Station, station } from '~/track/units'
 
-export { type Crest, crestsAndCompressions } from '~/track/crests'
+export { crestsAndCompressions } from '~/track/crests'
 
 /** Road heights at one station. Null where the source does not carry it: nothing is made up. */
 export interface HeightSample {
