@@ -13,7 +13,7 @@ const schema = z
     TRUST_PROXY_HOPS: z.coerce.number().int().min(0).max(10).default(0),
     LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
     TILE_URL: z.string().includes('{z}').includes('{x}').includes('{y}').optional(),
-    DEMO_PASSWORD: z.string().min(8).optional(),
+    DEMO_PASSWORD: z.string().min(1).optional(),
   })
   .transform((env) => ({
     ...env,
