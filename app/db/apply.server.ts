@@ -6,6 +6,7 @@ import { newId } from './apply/new-id'
 import { lockScopes } from './apply/scopes'
 import type { Db } from './database'
 import { personOf } from './own-team'
+import { isStorable } from './storable'
 
 /** What became of a batch: all of it, or nothing of it and the first operation that could not be. */
 export type BatchOutcome =
@@ -108,6 +109,7 @@ async function transact<Answer>(
 function readOperation(input: unknown): Operation | Outcome {
   const version = (input as { v?: unknown } | null | undefined)?.v
   if (typeof version === 'number' && version > OPERATION_VERSION) return { kind: 'refused', reason: 'newer-version' }
+  if (!isStorable(input)) return { kind: 'invalid', problems: [{ field: '', code: 'not-storable' }] }
   const parsed = operationSchema.safeParse(input)
   if (parsed.success) return parsed.data as Operation
   const problems = parsed.error.issues.map(({ path, code }) => ({ field: path.join('.'), code }))

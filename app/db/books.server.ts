@@ -7,7 +7,8 @@ import { OPERATION_VERSION, type Operation } from '~/book/operation'
 import { makeCard } from './apply/consequences'
 import { newId } from './apply/new-id'
 import { applyAll } from './apply.server'
-import { commander, type Declined, type Member } from './command'
+import { nameProblems } from './checks'
+import { commander, type Declined, lockTeam, type Member } from './command'
 import type { Db } from './database'
 import { ownTeam } from './own-team'
 import { books, cars, corners, layouts } from './schema'
@@ -26,7 +27,10 @@ const FIRST_CONDITIONS: readonly { kind: ConditionKind; name: string }[] = [
   { kind: 'wet', name: 'Wet' },
 ]
 
-/** Makes a book for a layout and a car: dry and wet, and an empty card for each corner. The car's length is pinned. */
+/**
+ * Makes a book for a layout and a car: dry and wet, and an empty card for each corner. The car's length is pinned. Sending the same
+ * id again makes nothing more.
+ */
 export async function makeBook(
   db: Db,
   actor: Actor,
@@ -34,8 +38,9 @@ export async function makeBook(
 ): Promise<{ kind: 'made'; book: BookId; slug: string } | Declined> {
   const asked = await commander(db, actor, 'book.make')
   if (asked.kind !== 'member') return asked
+  const problems = nameProblems('name', input.name)
+  if (problems.length > 0) return { kind: 'invalid', problems }
   const name = input.name.trim()
-  if (name === '') return { kind: 'invalid', problems: [{ field: 'name', code: 'required' }] }
   return db.transaction((tx) => addBook(tx, actor, asked.member, { ...input, name }))
 }
 
@@ -45,6 +50,10 @@ async function addBook(
   { team, person }: Member,
   { id, name, layout, car }: NewBook,
 ): Promise<{ kind: 'made'; book: BookId; slug: string } | Declined> {
+  await lockTeam(db, team)
+  const known = await db.select({ id: books.id, slug: books.slug }).from(books).where(eq(books.teamId, team))
+  const again = known.find((book) => book.id === id)
+  if (again) return { kind: 'made', book: id, slug: again.slug }
   // The layout stays locked until its cards are there: a corner made meanwhile would have none.
   const [onLayout] = await db
     .select({ id: layouts.id })
@@ -58,7 +67,6 @@ async function addBook(
   if (!onLayout) return { kind: 'invalid', problems: [{ field: 'layout', code: 'not-found' }] }
   if (!forCar) return { kind: 'invalid', problems: [{ field: 'car', code: 'not-found' }] }
 
-  const known = await db.select({ slug: books.slug }).from(books).where(eq(books.teamId, team))
   const slug = freeSlug(
     name,
     known.map((row) => row.slug),

@@ -1,6 +1,7 @@
 import { and, asc, eq } from 'drizzle-orm'
 import type { Actor } from '~/book/actions'
 import type { CarId } from '~/book/ids'
+import { nameProblems, type Problem, rangeProblems } from './checks'
 import { commander, type Declined } from './command'
 import type { Db } from './database'
 import { ownTeam } from './own-team'
@@ -25,12 +26,28 @@ export function readCars(db: Db, actor: Actor): Promise<Car[]> {
     .orderBy(asc(cars.name), asc(cars.id))
 }
 
+/** Metres that a car may measure: the least and the most. */
+const MEASURES = { length: [1, 10], width: [0.5, 4], eyeHeight: [0.2, 3] } as const
+
+function problemsOf(car: Car): Problem[] {
+  const { length, width, eyeHeight } = MEASURES
+  return [
+    ...nameProblems('name', car.name),
+    ...rangeProblems('length', car.length, ...length),
+    ...rangeProblems('width', car.width, ...width),
+    ...rangeProblems('eyeHeight', car.eyeHeight, ...eyeHeight),
+  ]
+}
+
 /** Adds a car. Sending the same id again changes nothing. */
 export async function addCar(db: Db, actor: Actor, car: Car): Promise<{ kind: 'made'; car: CarId } | Declined> {
   const asked = await commander(db, actor, 'car.change')
   if (asked.kind !== 'member') return asked
+  const problems = problemsOf(car)
+  if (problems.length > 0) return { kind: 'invalid', problems }
   const { team, person } = asked.member
-  const { id, name, length, width, eyeHeight } = car
+  const { id, length, width, eyeHeight } = car
+  const name = car.name.trim()
   await db
     .insert(cars)
     .values({ teamId: team, id, name, length, width, eyeHeight, madeBy: person })
@@ -42,10 +59,12 @@ export async function addCar(db: Db, actor: Actor, car: Car): Promise<{ kind: 'm
 export async function changeCar(db: Db, actor: Actor, car: Car): Promise<{ kind: 'changed' } | Declined> {
   const asked = await commander(db, actor, 'car.change')
   if (asked.kind !== 'member') return asked
+  const problems = problemsOf(car)
+  if (problems.length > 0) return { kind: 'invalid', problems }
   const { id, ...fields } = car
   const changed = await db
     .update(cars)
-    .set({ name: fields.name, length: fields.length, width: fields.width, eyeHeight: fields.eyeHeight })
+    .set({ name: fields.name.trim(), length: fields.length, width: fields.width, eyeHeight: fields.eyeHeight })
     .where(and(ownTeam(actor, cars.teamId), eq(cars.id, id), eq(cars.state, 'live')))
     .returning({ id: cars.id })
   return changed.length > 0 ? { kind: 'changed' } : { kind: 'not-found' }

@@ -1,4 +1,4 @@
-import { eq } from 'drizzle-orm'
+import { and, eq } from 'drizzle-orm'
 import type { FeatureCollection } from 'geojson'
 import type { Actor } from '~/book/actions'
 import type { CircuitId, CornerId, GeometryHash, LayoutId, TeamId } from '~/book/ids'
@@ -6,14 +6,17 @@ import type { TurnDirection } from '~/book/kinds'
 import { type Json, OPERATION_VERSION, type Operation } from '~/book/operation'
 import type { Datum } from '~/book/place'
 import { makeCentreline } from '~/track/centreline'
+import { wrap } from '~/track/lap-frame'
 import type { Position } from '~/track/units'
 import { newId } from './apply/new-id'
 import { applyAll } from './apply.server'
 import { canonicalJson, sha256 } from './canonical'
-import { commander, type Declined, type Member } from './command'
+import { nameProblems, type Problem, rangeProblems, zoneProblems } from './checks'
+import { commander, type Declined, lockTeam, type Member } from './command'
 import type { Db } from './database'
 import { centrelines, circuits, grounds, layouts } from './schema'
 import { freeSlug } from './slugs'
+import { isStorable } from './storable'
 
 /** A corner of a circuit that is brought in. Places are metres of the drawn line. */
 export interface NewCorner {
@@ -48,13 +51,38 @@ class Undone extends Error {
   }
 }
 
-/** Brings a circuit in, whole or not at all; its corners stand in the change log like any later change. */
+/** A file of fewer positions is no circuit; a road narrower or wider than this is a slip of the pen. */
+const LEAST_POSITIONS = 8
+const ROAD_WIDTH = [3, 60] as const
+
+function problemsOf({ circuit, layout, positions, ground }: NewCircuit): Problem[] {
+  const isLine = positions.length >= LEAST_POSITIONS && isStorable(positions)
+  return [
+    ...nameProblems('circuit.name', circuit.name),
+    ...zoneProblems('circuit.timeZone', circuit.timeZone),
+    ...nameProblems('layout.name', layout.name),
+    ...rangeProblems('layout.roadWidth', layout.roadWidth, ...ROAD_WIDTH),
+    ...(isLine ? [] : [{ field: 'positions', code: 'invalid' as const }]),
+    ...(isLine ? rangeProblems('layout.startAlong', layout.startAlong, 0, makeCentreline(positions).length) : []),
+    ...(isStorable(ground) ? [] : [{ field: 'ground', code: 'invalid' as const }]),
+  ]
+}
+
+/**
+ * Brings a circuit in, whole or not at all; its corners stand in the change log like any later change. Sending the same ids again
+ * makes nothing more.
+ */
 export async function importCircuit(db: Db, actor: Actor, input: NewCircuit): Promise<ImportOutcome> {
   const asked = await commander(db, actor, 'circuit.change')
   if (asked.kind !== 'member') return asked
   const { member } = asked
+  const problems = problemsOf(input)
+  if (problems.length > 0) return { kind: 'invalid', problems }
   try {
     return await db.transaction(async (tx) => {
+      await lockTeam(tx, member.team)
+      const again = await slugOfCircuit(tx, member, input.circuit.id)
+      if (again) return { kind: 'made', circuit: input.circuit.id, slug: again, layout: input.layout.id }
       const slug = await addCircuit(tx, member, input.circuit)
       await addLayout(tx, member, input)
       await addCorners(tx, actor, input)
@@ -66,13 +94,19 @@ export async function importCircuit(db: Db, actor: Actor, input: NewCircuit): Pr
   }
 }
 
+async function slugOfCircuit(db: Db, { team }: Member, id: CircuitId): Promise<string | null> {
+  const isIt = and(eq(circuits.teamId, team), eq(circuits.id, id))
+  const [row] = await db.select({ slug: circuits.slug }).from(circuits).where(isIt)
+  return row?.slug ?? null
+}
+
 async function addCircuit(db: Db, { team, person }: Member, { id, name, timeZone }: NewCircuit['circuit']) {
   const known = await db.select({ slug: circuits.slug }).from(circuits).where(eq(circuits.teamId, team))
   const slug = freeSlug(
     name,
     known.map((row) => row.slug),
   )
-  await db.insert(circuits).values({ teamId: team, id, slug, name, timeZone, madeBy: person })
+  await db.insert(circuits).values({ teamId: team, id, slug, name: name.trim(), timeZone, madeBy: person })
   return slug
 }
 
@@ -82,10 +116,10 @@ async function addLayout(db: Db, { team, person }: Member, { circuit, layout, po
     teamId: team,
     id: layout.id,
     circuitId: circuit.id,
-    name: layout.name,
+    name: layout.name.trim(),
     centrelineHash: hash,
     groundHash: ground && (await storeGround(db, team, ground)),
-    startAlong: millimetres(layout.startAlong),
+    startAlong: wrap(millimetres(layout.startAlong), length),
     reversed: layout.reversed,
     roadWidth: millimetres(layout.roadWidth),
     length,

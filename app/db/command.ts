@@ -3,7 +3,7 @@ import type { Action, Actor, Facts, Reason } from '~/book/actions'
 import type { PersonId, TeamId } from '~/book/ids'
 import { may } from '~/book/may'
 import type { Db } from './database'
-import { memberships } from './schema'
+import { memberships, teams } from './schema'
 
 /** Why a command did nothing. */
 export type Declined =
@@ -41,4 +41,9 @@ export async function commander(
       ),
     )
   return row ? { kind: 'member', member: row } : { kind: 'refused', reason: 'not-a-member' }
+}
+
+/** Lets one command at a time give names within a team: two of one name each get an address of their own. */
+export async function lockTeam(db: Db, team: TeamId): Promise<void> {
+  await db.select({ id: teams.id }).from(teams).where(eq(teams.id, team)).for('no key update')
 }

@@ -5,6 +5,7 @@ import { commander, type Declined } from './command'
 import type { Db } from './database'
 import { ownTeam, personOf } from './own-team'
 import { IMPORT_BYTES, imports } from './schema'
+import { isStorable } from './storable'
 
 /** A circuit file between the steps of its import. It is its uploader's alone. */
 export interface ImportDraft {
@@ -30,6 +31,8 @@ export async function putImport(db: Db, actor: Actor, draft: ImportDraft): Promi
   if (asked.kind !== 'member') return asked
   if (draft.bytes.byteLength > IMPORT_BYTES)
     return { kind: 'invalid', problems: [{ field: 'file', code: 'too-large' }] }
+  if (!isStorable([draft.fileName, draft.options]))
+    return { kind: 'invalid', problems: [{ field: 'file', code: 'invalid' }] }
   const { team, person } = asked.member
   const { id, fileName, bytes, options } = draft
   await db

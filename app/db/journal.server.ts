@@ -10,6 +10,7 @@ import { commander, type Declined, type Member } from './command'
 import type { Db } from './database'
 import { ownTeam } from './own-team'
 import { books, conditions, findings, layouts, marks, memberships } from './schema'
+import { isStorable } from './storable'
 
 export type JournalOutcome = { kind: 'added'; added: number } | { kind: 'refused'; reason: 'id-in-use' } | Declined
 
@@ -25,6 +26,7 @@ const invalid = (problems: readonly Problem[]): JournalOutcome => ({ kind: 'inva
  * @param inputs findings as they came, unchecked; see `findingSchema`
  */
 export async function addFindings(db: Db, actor: Actor, inputs: readonly unknown[]): Promise<JournalOutcome> {
+  if (!isStorable(inputs)) return invalid([{ field: '', code: 'not-storable' }])
   const parsed = z.array(findingSchema).safeParse(inputs)
   if (!parsed.success)
     return invalid(parsed.error.issues.map(({ path, code }) => ({ field: path.join('.'), code: code ?? 'invalid' })))

@@ -30,9 +30,12 @@ export async function grantRights(db: Db, role: string): Promise<void> {
   const owner = await db.execute<{ name: string }>(sql`select current_user as name`)
   if (owner.rows[0]?.name === role) return
   const app = sql.identifier(role)
-  await db.execute(sql`revoke all on all tables in schema public from ${app}`)
-  await db.execute(sql`grant usage on schema public to ${app}`)
-  await db.execute(sql`grant select, insert, update on all tables in schema public to ${app}`)
-  await db.execute(sql`revoke update on ${names(KEPT)} from ${app}`)
-  await db.execute(sql`grant delete on ${names(REMOVED_FROM)} to ${app}`)
+  // Together or not at all: an app that is running must not be without rights for a moment.
+  await db.transaction(async (tx) => {
+    await tx.execute(sql`revoke all on all tables in schema public from ${app}`)
+    await tx.execute(sql`grant usage on schema public to ${app}`)
+    await tx.execute(sql`grant select, insert, update on all tables in schema public to ${app}`)
+    await tx.execute(sql`revoke update on ${names(KEPT)} from ${app}`)
+    await tx.execute(sql`grant delete on ${names(REMOVED_FROM)} to ${app}`)
+  })
 }

@@ -182,6 +182,23 @@ describe('what is no operation', () => {
     expect((await applyOperation(db, book.team.coach, input)).kind).toBe('invalid')
   })
 
+  const deep = () => {
+    let nested: unknown = 'bottom'
+    for (let depth = 0; depth < 50_000; depth += 1) nested = [nested]
+    return nested
+  }
+
+  test.each<[string, () => unknown]>([
+    ['a NUL in a text', () => 'line\0break'],
+    ['half a character', () => 'half \ud83d'],
+    ['a place without end', deep],
+  ])('%s cannot be kept and is invalid', async (_, value) => {
+    const card = (to: unknown) => operation(book.scope, 'card', book.cards[0], { line: ['', to as string] })
+    expect((await applyOperation(db, book.team.coach, card(value()))).kind).toBe('invalid')
+    const reasoned = { ...addsMark(book, newMark()), reason: value() }
+    expect((await applyOperation(db, book.team.coach, reasoned)).kind).toBe('invalid')
+  })
+
   test('a newer version is refused as such', async () => {
     const sent = { ...addsMark(book, newMark()), v: 2 }
     expect(await applyOperation(db, book.team.coach, sent)).toEqual({ kind: 'refused', reason: 'newer-version' })

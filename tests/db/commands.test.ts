@@ -2,7 +2,7 @@ import { beforeAll, describe, expect, test } from 'vitest'
 import type { BookId, CarId, LayoutId } from '~/book/ids'
 import { makeBook } from '~/db/books.server'
 import { addCar, changeCar, readCars } from '~/db/cars.server'
-import { importCircuit } from '~/db/circuits.server'
+import { importCircuit, type NewCircuit } from '~/db/circuits.server'
 import { dropImport, putImport, readImport, setImportOptions, sweepImports } from '~/db/imports.server'
 import { readBooks } from '~/db/read-books.server'
 import { readChanges } from '~/db/read-changes.server'
@@ -51,6 +51,25 @@ describe('a circuit that is brought in', () => {
     expect(await importCircuit(db, posing, circuit())).toEqual({ kind: 'refused', reason: 'not-a-member' })
   })
 
+  test('sent again is there once', async () => {
+    const own = await makeTeam()
+    const drawn = circuit()
+    const outcomes = await Promise.all([1, 2, 3].map(() => importCircuit(db, own.coach, drawn)))
+    expect(new Set(outcomes.map((outcome) => JSON.stringify(outcome))).size).toBe(1)
+    expect(await readCircuits(db, own.coach)).toHaveLength(1)
+  })
+
+  test.each<[string, (drawn: NewCircuit) => NewCircuit]>([
+    ['circuit.name', (drawn) => ({ ...drawn, circuit: { ...drawn.circuit, name: ' ' } })],
+    ['circuit.timeZone', (drawn) => ({ ...drawn, circuit: { ...drawn.circuit, timeZone: 'Atlantic/Nowhere' } })],
+    ['layout.roadWidth', (drawn) => ({ ...drawn, layout: { ...drawn.layout, roadWidth: Number.NaN } })],
+    ['layout.startAlong', (drawn) => ({ ...drawn, layout: { ...drawn.layout, startAlong: 5000 } })],
+    ['positions', (drawn) => ({ ...drawn, positions: drawn.positions.slice(0, 5) })],
+  ])('needs a sensible %s', async (field, spoil) => {
+    const outcome = await importCircuit(db, team.coach, spoil(circuit()))
+    expect(outcome).toMatchObject({ kind: 'invalid', problems: [{ field }] })
+  })
+
   test('drawn twice alike shares its centreline, and each has a name of its own in addresses', async () => {
     const own = await makeTeam()
     const drawn = circuit()
@@ -89,6 +108,18 @@ describe('a new book', () => {
     expect(await readBooks(db, team.driver)).toHaveLength(4)
   })
 
+  test('sent again is there once; two of one name at one moment have two addresses', async () => {
+    const own = await makeTeamBook(await makeTeam())
+    const [car] = await readCars(db, own.team.coach)
+    const ask = (id: BookId) => makeBook(db, own.team.coach, { id, name: 'Spring', layout: own.layout, car: car!.id })
+    const [first, second] = [newId<BookId>(), newId<BookId>()]
+    const made = await Promise.all([ask(first), ask(first), ask(second)])
+    const slugs = made.map((outcome) => (outcome.kind === 'made' ? outcome.slug : outcome.kind))
+    expect(slugs[0]).toBe(slugs[1])
+    expect(new Set(slugs)).toEqual(new Set(['spring', 'spring-2']))
+    expect(await readBooks(db, own.team.coach)).toHaveLength(3)
+  })
+
   test('needs a layout and a car of the team, and the right', async () => {
     const other = await makeTeamBook(await makeTeam())
     const [car] = await readCars(db, team.coach)
@@ -109,6 +140,12 @@ describe('cars', () => {
     expect((await readCars(db, team.coach)).map(({ id }) => id)).not.toContain(car.id)
     expect(await changeCar(db, team.coach, car)).toEqual({ kind: 'not-found' })
     expect(await addCar(db, team.driver, car)).toEqual({ kind: 'refused', reason: 'role' })
+  })
+
+  test('measure something', async () => {
+    const car = { id: newId<CarId>(), name: 'Spare', length: 0, width: -1, eyeHeight: Number.POSITIVE_INFINITY }
+    const problems = ['length', 'width', 'eyeHeight'].map((field) => ({ field, code: 'out-of-range' }))
+    expect(await addCar(db, team.coach, car)).toEqual({ kind: 'invalid', problems })
   })
 })
 

@@ -1,0 +1,32 @@
+import { isStorable } from './storable'
+
+/** Checks of what commands are given; what people type is checked in the form too, with words for it. */
+
+export interface Problem {
+  field: string
+  code: 'required' | 'too-long' | 'out-of-range' | 'invalid'
+}
+
+const NAME_LENGTH = 80
+
+/** What is wrong with a name; blanks around it do not count. */
+export function nameProblems(field: string, name: string): Problem[] {
+  const length = name.trim().length
+  if (length === 0) return [{ field, code: 'required' }]
+  if (length > NAME_LENGTH) return [{ field, code: 'too-long' }]
+  return isStorable(name) ? [] : [{ field, code: 'invalid' }]
+}
+
+/** What is wrong with a number that must lie between two others, both included. */
+export const rangeProblems = (field: string, value: number, least: number, most: number): Problem[] =>
+  value >= least && value <= most ? [] : [{ field, code: 'out-of-range' }]
+
+/** What is wrong with an IANA time zone. */
+export function zoneProblems(field: string, zone: string): Problem[] {
+  try {
+    new Intl.DateTimeFormat('en', { timeZone: zone })
+    return []
+  } catch {
+    return [{ field, code: 'invalid' }]
+  }
+}
