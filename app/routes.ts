@@ -20,6 +20,7 @@ export default [
       route('circuits', 'routes/team/circuits.tsx'),
       route('circuits/import', 'routes/team/import.tsx'),
       route('circuits/import/:draft', 'routes/team/import-draft.tsx'),
+      route('circuits/:circuit', 'routes/team/circuit.tsx'),
       route('cars', 'routes/team/cars.tsx'),
     ]),
   ]),

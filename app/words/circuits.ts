@@ -44,7 +44,6 @@ export const circuitWords = {
   undone: 'Taken back.',
   undo: 'Undo',
   start: 'Start line and direction',
-  startNow: (along: string) => `The start line lies ${along} along the drawn line.`,
   reverse: 'Drive it the other way',
   move: 'Move the start line',
   moveMetres: 'Metres',
@@ -58,11 +57,28 @@ export const circuitWords = {
   metresWrong: 'A number of metres, such as 250.',
   metresOutside: (length: Metres) => `The lap is ${formatKilometres(length)} long.`,
   booksCount: 'Every station of the books on it counts from the start line. Marks stay where they are.',
-  conflict: 'Two people changed this.',
+  conflict: 'Two people changed this. Keep one.',
+  conflictIn: (number: string, name: string) => `Two people changed corner ${number} ${name}. Keep one.`,
+  startLine: 'start line',
+  startAt: (along: string) => `${along} along the drawn line`,
+  undoConflict: 'It has been changed again since, so it stays as it is.',
   yours: 'yours',
   theirs: 'theirs',
   keepYours: 'Keep yours',
   keepTheirs: 'Keep theirs',
-  roadWidth: 'Road width, m',
   changes: 'Changed lately',
 } as const
+
+export type LayoutChangeKind = 'corner' | 'direction' | 'start'
+
+/** A change of a layout in words: "2 is Groyne, was Turn 2", "start line moved". */
+export function layoutChangeWords(
+  kind: LayoutChangeKind,
+  number: string | null,
+  set: Record<string, { from: unknown; to: unknown }>,
+): string {
+  if (kind === 'direction') return 'Driven the other way'
+  if (kind === 'start') return 'Start line moved'
+  const told = [set.number, set.name].flatMap((change) => (change ? [`${change.to}, was ${change.from}`] : []))
+  return `Corner ${number ?? ''}: ${told.join('; ')}`
+}

@@ -6,10 +6,10 @@ import { lapHeights } from '~/draw/lap-heights'
 import { type LapCorner, lapMap } from '~/draw/lap-map'
 import type { Road } from '~/draw/road'
 import { Drawing } from '~/draw/svg/drawing'
-import { turningNumber } from '~/track/turning-number'
 import { metres } from '~/track/units'
 import { formatMetres } from '~/words/measures'
-import { circuitLine, contourNote, heightsLabel, heightWords, lapDirection, mapLabel } from '~/words/overview'
+import { circuitLine, contourNote, heightsLabel, heightWords, mapLabel } from '~/words/overview'
+import { directionOf } from './lap-facts'
 
 interface CircuitSheetProps {
   road: Road
@@ -26,10 +26,6 @@ const NONE: readonly never[] = []
 /** Height of the map for its width: a phone's is squarer. */
 const mapHeight = (width: number) => Math.round(width * (width < 600 ? 0.88 : 0.66))
 const heightsHeight = (width: number) => (width < 600 ? 130 : 160)
-
-/** Which way round the lap is driven, in words. */
-export const directionOf = ({ frame }: Road): string =>
-  lapDirection(turningNumber(frame.centreline) * (frame.reversed ? -1 : 1))
 
 /** A layout as it is driven: map with its corners' plates, and below it the heights of one lap. */
 export function CircuitSheet({ width: guess, ...sheet }: CircuitSheetProps): ReactNode {

@@ -7,18 +7,16 @@ import { Facts } from '~/components/ui/facts'
 import { Caution, ErrorNotice } from '~/components/ui/notice'
 import { roadOf } from '~/draw/road'
 import { makeCentreline } from '~/track/centreline'
-import { heightProfile } from '~/track/heights'
 import type { DraftCorner } from '~/track/layout-draft'
 import { makeFrame } from '~/track/layout-frame'
 import type { Lap, Piece, Remedy } from '~/track/read-layout'
-import { type Along, metres, type Position } from '~/track/units'
-import { circuitWords } from '~/words/circuits'
+import type { Along, Position } from '~/track/units'
 import { importWords as words } from '~/words/import'
-import { formatKilometres, formatNumber } from '~/words/measures'
 import { CircuitFields } from './circuit-fields'
-import { CircuitSheet, directionOf } from './circuit-sheet'
+import { CircuitSheet } from './circuit-sheet'
 import { CornerPicks } from './corner-picks'
 import type { ImportFields } from './import-schema'
+import { lapFacts } from './lap-facts'
 import { AnchorFields, LapChoice, PieceChoice } from './reading-choices'
 import { StartFields } from './start-fields'
 
@@ -99,7 +97,7 @@ function ReadLayout({
       </div>
       <div className="grid content-start gap-7">
         <Part title={words.asRead}>
-          <Facts facts={factsOf(road, corners.length)} />
+          <Facts facts={lapFacts(road, corners.length)} />
           <ReadingChoices laps={page.laps} lapTaken={page.lapTaken} pieces={page.pieces} fields={fields} />
         </Part>
         <Part title={words.way}>
@@ -162,22 +160,4 @@ function ReadingChoices({ laps, lapTaken, pieces, fields }: ReadingProps) {
       {pieces.length > 1 && <PieceChoice field={fields.pieces} pieces={pieces} />}
     </>
   )
-}
-
-const HEIGHT_STEP = metres(10)
-
-function factsOf(road: ReturnType<typeof roadOf>, corners: number): (readonly [string, string])[] {
-  const heights = heightProfile(road.frame, HEIGHT_STEP)
-  const { facts } = circuitWords
-  return [
-    [facts.length, formatKilometres(road.frame.length)],
-    [facts.direction, directionOf(road)],
-    [facts.corners, formatNumber(corners)],
-    [
-      facts.heights,
-      heights
-        ? circuitWords.heightRange(formatNumber(heights.lowest.height), formatNumber(heights.highest.height))
-        : circuitWords.noHeights,
-    ],
-  ]
 }

@@ -1,6 +1,7 @@
 import { href, Outlet, redirect } from 'react-router'
 import { OutsideFrame } from '~/components/frame/outside-frame'
 import { ProblemPage } from '~/components/frame/problem-page'
+import { frameRevalidates } from '~/components/frame/revalidation'
 import { readTeamsOf } from '~/db/read-people.server'
 import { dbContext } from '~/middleware/context'
 import { personContext } from '~/middleware/person.server'
@@ -23,6 +24,8 @@ export async function loader({ context }: Route.LoaderArgs) {
     teams: teams.map(({ team: { slug, name } }) => ({ slug, name })),
   }
 }
+
+export const shouldRevalidate = frameRevalidates
 
 export default function TeamGuard() {
   return <Outlet />
