@@ -6,7 +6,7 @@ import { judge } from '~/track/read/judge'
 import { KmlReader, kmlNamespaces } from '~/track/read/kml'
 import { chooseLap, type Lap } from '~/track/read/laps'
 import { type Content, type HeightDatum, Points, type Reading } from '~/track/read/points'
-import { nameFile, type Problem, problem } from '~/track/read/problems'
+import { count, nameFile, type Problem, problem } from '~/track/read/problems'
 import { type Format, formatWords, type OpenedFile, openFile } from '~/track/read/text'
 import { walkXml } from '~/track/read/xml'
 import { type LngLat, type Metres, metres, type Position } from '~/track/units'
@@ -113,7 +113,7 @@ function readXml(file: OpenedFile): { format: Format; reading: Reading } {
       return problem('not-the-format', says)
     }
     format = root
-    reader = root === 'gpx' ? new GpxReader(place) : new KmlReader(place)
+    reader = root === 'gpx' ? new GpxReader(place, file.body.length) : new KmlReader(place, file.body.length)
     return reader
   })
   if (found || !reader) return { format, reading: { ok: false, problems: found ? [found] : [] } }
@@ -128,6 +128,9 @@ function notTheRoot(root: string, promised: Format | undefined): Problem {
   return problem('not-the-format', says)
 }
 
+/** Most pieces, or stretches of a trace, that a line may come in. */
+const mostPieces = 5000
+
 interface ChosenLine {
   readonly points: Points
   readonly name?: string
@@ -138,6 +141,10 @@ interface ChosenLine {
 
 /** One line of a file's content: a lap of a trace, or the pieces of a drawing joined. */
 function chooseLine(content: Content, options: ReadOptions): ChosenLine | Problem {
+  if (content.lines.length > mostPieces) {
+    const says = `The line comes in ${count(content.lines.length)} pieces; at most ${count(mostPieces)} are read. Save the circuit's line alone.`
+    return problem('too-many-pieces', says)
+  }
   const lap = content.kind === 'trace' ? chooseLap(content, options.lap) : undefined
   if (lap && 'code' in lap) return lap
   if (!lap) {
@@ -146,7 +153,7 @@ function chooseLine(content: Content, options: ReadOptions): ChosenLine | Proble
     const { points, name, pieces, warnings } = joined
     return { points, ...(name && { name }), isLap: false, offers: pieces ? { pieces } : {}, warnings }
   }
-  const points = new Points()
+  const points = new Points(lap.end - lap.start, content.points.hasWidths)
   for (let i = lap.start; i < lap.end; i++) points.copy(content.points, i)
   const offers = lap.laps ? { laps: lap.laps, lapTaken: lap.lapTaken! } : {}
   return { points, ...(lap.name && { name: lap.name }), isLap: lap.isLap, offers, warnings: lap.warnings }
@@ -161,12 +168,12 @@ function layoutOf(points: Points, name: string | undefined, heightDatum: HeightD
     const hasHeight = !Number.isNaN(height[i]!)
     if (hasHeight) heights++
     positions.push(hasHeight ? [lon[i]!, lat[i]!, height[i]!] : [lon[i]!, lat[i]!])
-    widths.push({ right: metres(right[i]!), left: metres(left[i]!) })
+    if (points.hasWidths) widths.push({ right: metres(right[i]!), left: metres(left[i]!) })
   }
   return {
     ...(name && { name }),
     positions,
-    ...(!Number.isNaN(right[0]!) && { widths }),
+    ...(points.hasWidths && { widths }),
     ...(heights > 0 && heightDatum && { heightDatum }),
   }
 }

@@ -11,7 +11,7 @@ const thinnedMetres = 0.5
 /** A line without positions that say nothing. */
 export interface Cleaned {
   /** Indexes of the positions kept, in order. */
-  readonly kept: number[]
+  readonly kept: Int32Array
   /** Whether the last position stood at the place of the first. */
   readonly closed: boolean
   readonly warnings: readonly Problem[]
@@ -24,14 +24,12 @@ export interface Cleaned {
  */
 export function clean(flat: Flat): Cleaned {
   const n = flat.x.length
-  let kept = spaced(
-    flat,
-    Array.from({ length: n }, (_, i) => i),
-    samePosition,
-  )
+  let kept = spaced(flat, n, undefined, samePosition)
   const repeated = n - kept.length
   const beforeClosing = kept.length
-  while (kept.length > 1 && gapBetween(flat, kept[0]!, kept.at(-1)!) < samePosition) kept.pop()
+  let last = kept.length - 1
+  while (last > 0 && gapBetween(flat, kept[0]!, kept[last]!) < samePosition) last--
+  kept = kept.subarray(0, last + 1)
   const closed = kept.length < beforeClosing
   const warnings: Problem[] = []
   if (repeated > 0) {
@@ -40,22 +38,27 @@ export function clean(flat: Flat): Cleaned {
   }
   if (kept.length > dense) {
     const all = kept.length
-    kept = spaced(flat, kept, thinnedMetres)
+    kept = spaced(flat, kept.length, kept, thinnedMetres)
     const says = `Of ${count(all)} positions ${count(kept.length)} are kept, one about every half metre. The length stays the same within 0.01\u00A0%.`
     warnings.push(problem('thinned', says))
   }
   return { kept, closed, warnings }
 }
 
-function spaced(flat: Flat, indexes: readonly number[], metres: number): number[] {
-  const kept: number[] = []
-  for (const i of indexes) if (kept.length === 0 || gapBetween(flat, kept.at(-1)!, i) >= metres) kept.push(i)
-  return kept
+/** Those of `n` positions, all or the ones of a list, that lie so many metres or more from the one kept before. */
+function spaced(flat: Flat, n: number, list: Int32Array | undefined, metres: number): Int32Array {
+  const kept = new Int32Array(n)
+  let length = 0
+  for (let k = 0; k < n; k++) {
+    const i = list ? list[k]! : k
+    if (length === 0 || gapBetween(flat, kept[length - 1]!, i) >= metres) kept[length++] = i
+  }
+  return kept.subarray(0, length)
 }
 
 /** The positions kept, as columns of their own. */
-export function pick(points: Points, flat: Flat, kept: readonly number[]): { points: Points; flat: Flat } {
-  const chosen = new Points()
+export function pick(points: Points, flat: Flat, kept: Int32Array): { points: Points; flat: Flat } {
+  const chosen = new Points(kept.length, points.hasWidths)
   const x = new Float64Array(kept.length)
   const y = new Float64Array(kept.length)
   kept.forEach((i, k) => {

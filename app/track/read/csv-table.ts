@@ -1,7 +1,12 @@
 import { type Problem, problem } from '~/track/read/problems'
 
-/** Most fields read of one row. */
+/** Most fields read of one row, and longest field in quotation marks. */
 const mostFields = 256
+const longestField = 10_000
+
+const numberSign = 35
+const quote = 34
+const blank = 32
 
 export interface Row {
   readonly fields: readonly string[]
@@ -13,7 +18,8 @@ export interface Row {
 
 /**
  * Walks the rows of a CSV text (RFC 4180): fields between `delimiter`, quotation marks doubled inside quoted fields, line
- * ends CRLF, LF or CR. Fields come trimmed. Blank lines are passed over.
+ * ends CRLF, LF or CR. Fields come trimmed. Blank lines are passed over. A quoted field of
+ * more than 10,000 letters is taken for one that is never closed.
  */
 export class CsvRows {
   problem: Problem | undefined
@@ -25,12 +31,16 @@ export class CsvRows {
     this.lineEnd = text.includes('\n') || !text.includes('\r') ? '\n' : '\r'
   }
 
-  /** The next row that is not blank, or nothing at the end and at a quotation mark that is never closed. */
-  next(delimiter: string): Row | undefined {
+  /**
+   * The next row that is not blank, or nothing at the end and at a quotation mark that is never closed.
+   * @param withComments whether rows that begin with a number sign are given as well
+   */
+  next(delimiter: string, withComments = false): Row | undefined {
     while (this.at < this.text.length && !this.problem) {
       const line = this.line
       const start = this.at
       const raw = this.takeLine()
+      if (raw.charCodeAt(0) === numberSign && !withComments) continue
       if (raw.trim() === '') continue
       if (!raw.includes('"')) return { fields: split(raw, delimiter), line, raw }
       this.at = start
@@ -62,8 +72,8 @@ export class CsvRows {
     const fields: string[] = []
     const startLine = this.line
     for (;;) {
-      while (this.text[this.at] === ' ') this.at++
-      const isQuoted = this.text[this.at] === '"'
+      while (this.text.charCodeAt(this.at) === blank) this.at++
+      const isQuoted = this.text.charCodeAt(this.at) === quote
       const field = isQuoted ? this.takeQuotedField() : this.takePlainField(delimiter)
       if (field === undefined) {
         const says = 'A quotation mark opened in this row is never closed. Close it or take it out.'
@@ -82,8 +92,12 @@ export class CsvRows {
 
   private takePlainField(delimiter: string): string {
     const start = this.at
-    while (this.at < this.text.length && this.text[this.at] !== delimiter && this.text[this.at] !== this.lineEnd)
+    const [stop, end] = [delimiter.charCodeAt(0), this.lineEnd.charCodeAt(0)]
+    while (this.at < this.text.length) {
+      const c = this.text.charCodeAt(this.at)
+      if (c === stop || c === end) break
       this.at++
+    }
     return this.text.slice(start, this.at).trim()
   }
 
@@ -92,9 +106,9 @@ export class CsvRows {
     let from = this.at + 1
     for (;;) {
       const mark = this.text.indexOf('"', from)
-      if (mark === -1) return undefined
+      if (mark === -1 || value.length + mark - from > longestField) return undefined
       const part = this.text.slice(from, mark)
-      this.line += part.split(this.lineEnd).length - 1
+      if (part.includes(this.lineEnd)) this.line += part.split(this.lineEnd).length - 1
       value += part
       if (this.text[mark + 1] !== '"') {
         this.at = mark + 1

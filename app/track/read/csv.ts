@@ -11,7 +11,7 @@ import {
   instant,
   numberProblem,
 } from '~/track/read/numbers'
-import { mostPositions, Points, type Reading } from '~/track/read/points'
+import { mostPositions, Points, type Reading, roomFor } from '~/track/read/points'
 import { inMetres, type Problem, problem, quoted } from '~/track/read/problems'
 import type { LngLat } from '~/track/units'
 
@@ -48,13 +48,10 @@ export function readCsv(text: string, anchor?: LngLat): Reading {
       'The anchor is no place on the globe. Give its longitude from −180 to 180 and its latitude from −90 to 90.'
     return { ok: false, problems: [problem('anchor-out-of-range', says, undefined, 'give-anchor')] }
   }
-  const reader = new RowReader(header, anchor)
-  let first = true
-  for (let row = rows.next(header.delimiter); row && !reader.problem; row = rows.next(header.delimiter)) {
-    const units = first && reader.isUnits(row)
-    if (!row.raw.startsWith('#') && !units) reader.take(row)
-    first &&= row.raw.startsWith('#')
-  }
+  const reader = new RowReader(header, anchor, text.length)
+  let row = rows.next(header.delimiter)
+  if (row && reader.isUnits(row)) row = rows.next(header.delimiter)
+  for (; row && !reader.problem; row = rows.next(header.delimiter)) reader.take(row)
   const found = reader.problem ?? rows.problem
   return found ? { ok: false, problems: [found] } : reader.result()
 }
@@ -64,7 +61,7 @@ function findHeader(rows: CsvRows): Header | Problem {
   let firstRow: Row | undefined
   for (let i = 0; i < headerRows; i++) {
     const here = rows.place()
-    const line = rows.next('\0')
+    const line = rows.next('\0', true)
     if (!line) break
     const separator = i === 0 ? /^sep=(.)$/i.exec(line.raw)?.[1] : undefined
     if (separator) {
@@ -74,7 +71,7 @@ function findHeader(rows: CsvRows): Header | Problem {
     firstRow ??= line.raw.startsWith('#') ? undefined : line
     for (const delimiter of fixed ? [fixed] : delimiters) {
       rows.back(here)
-      const row = rows.next(delimiter)
+      const row = rows.next(delimiter, true)
       const columns = row && columnsOf(row.fields.map((field, k) => (k === 0 ? field.replace(/^#\s*/, '') : field)))
       if (columns) return { columns, delimiter }
     }
@@ -87,23 +84,24 @@ function findHeader(rows: CsvRows): Header | Problem {
 /** Takes the data rows. */
 class RowReader {
   problem: Problem | undefined
-  private readonly points = new Points()
+  private readonly points: Points
   private readonly columns: Columns
   private readonly toLngLat: ((x: number, y: number) => LngLat) | undefined
   private commas = 0
   private badHeights = 0
 
-  constructor({ columns }: Header, anchor: LngLat | undefined) {
+  constructor({ columns }: Header, anchor: LngLat | undefined, letters: number) {
     this.columns = columns
+    this.points = new Points(roomFor(letters, 4), columns.right !== undefined)
     const plane = columns.metric && anchor ? makePlane([anchor]) : undefined
     this.toLngLat = plane && ((x, y) => plane.toLngLat({ x, y }))
   }
 
-  /** Whether a row holds units instead of numbers. */
-  isUnits(row: Row): boolean {
-    const { first, second } = this.columns
-    const has = (i: number) => /\d/.test(row.fields[i] ?? '')
-    return !has(first) && !has(second) && row.fields[first] !== '' && row.fields[second] !== ''
+  /** Whether a row names units instead of holding numbers. */
+  isUnits({ fields }: Row): boolean {
+    const isWord = (text: string | undefined) =>
+      /^[^\d]+$/.test(text ?? '') && !/^\W*(nan|inf|null|none|na)/i.test(text!)
+    return isWord(fields[this.columns.first]) && isWord(fields[this.columns.second])
   }
 
   take(row: Row): void {

@@ -5,6 +5,7 @@ import type { Line } from '~/track/read/points'
 /** A lap is over where the trace returns within this many metres and degrees of heading. */
 const returnMetres = 15
 const returnDegrees = 30
+const leastCosine = Math.cos((returnDegrees * Math.PI) / 180)
 /** Shortest way round that counts as a return: no shorter circuit is read. */
 const shortestLap = 300
 /** Laps this near the median length speak for a gate. */
@@ -14,7 +15,8 @@ const gatesTried = 160
 const mostNear = 5000
 /** The trace is looked at in steps of this many metres, more where that would be too many steps. */
 const stepMetres = 5
-const mostSteps = 200_000
+const mostSteps = 100_000
+const jumpMetres = 1000
 
 /** Every few metres of a trace: which position stands there, in which stretch, and how far along. */
 interface Steps {
@@ -71,28 +73,35 @@ export function findRounds(flat: Flat, stretches: readonly Line[]): Rounds {
 }
 
 function takeSteps(flat: Flat, stretches: readonly Line[]): Steps {
-  for (let metres = stepMetres; ; metres *= 4) {
-    const steps: Steps = { at: [], stretch: [], along: [] }
-    stretches.forEach(({ start, end }, stretch) => {
-      let along = 0
-      let last = start
-      const add = (i: number) => {
-        steps.at.push(i)
-        steps.stretch.push(stretch)
-        steps.along.push(along)
-      }
-      add(start)
-      for (let i = start + 1; i < end && steps.at.length <= mostSteps; i++) {
-        const gap = gapBetween(flat, last, i)
-        if (gap < metres && i < end - 1) continue
-        if (gap === 0) continue
-        along += gap
-        last = i
-        add(i)
-      }
-    })
-    if (steps.at.length <= mostSteps || metres > 1e6) return steps
+  const steps: Steps = { at: [], stretch: [], along: [] }
+  const metres = Math.max(stepMetres, driven(flat, stretches) / mostSteps)
+  const add = (i: number, stretch: number, along: number) => {
+    steps.at.push(i)
+    steps.stretch.push(stretch)
+    steps.along.push(along)
   }
+  for (const [stretch, { start, end }] of stretches.entries()) {
+    let along = 0
+    let last = start
+    add(start, stretch, along)
+    for (let i = start + 1; i < end && steps.at.length < 2 * mostSteps; i++) {
+      const gap = gapBetween(flat, last, i)
+      if (gap === 0 || (gap < metres && i < end - 1)) continue
+      along += gap
+      last = i
+      add(i, stretch, along)
+    }
+  }
+  return steps
+}
+
+/** Metres driven in all, a jump counted as `jumpMetres`. */
+function driven(flat: Flat, stretches: readonly Line[]): number {
+  let sum = 0
+  for (const { start, end } of stretches) {
+    for (let i = start + 1; i < end; i++) sum += Math.min(jumpMetres, gapBetween(flat, i - 1, i))
+  }
+  return sum
 }
 
 /** Index of the pieces between one step and the next; piece k begins at step k. */
@@ -133,9 +142,8 @@ function passesAt({ x, y }: Flat, steps: Steps, pieces: Flatbush, gate: number):
     if (stretch[k] !== stretch[k + 1]) continue
     const [ax, ay] = [x[at[k]!]!, y[at[k]!]!]
     const [dx, dy] = [x[at[k + 1]!]! - ax, y[at[k + 1]!]! - ay]
-    const length = Math.hypot(dx, dy)
-    const cosine = (dx * gx + dy * gy) / (length * Math.hypot(gx, gy))
-    if (!(cosine >= Math.cos((returnDegrees * Math.PI) / 180))) continue
+    const length = Math.sqrt(dx * dx + dy * dy)
+    if (!(dx * gx + dy * gy >= leastCosine * length * Math.hypot(gx, gy))) continue
     const t = Math.min(1, Math.max(0, ((px - ax) * dx + (py - ay) * dy) / (length * length)))
     const distance = Math.hypot(ax + t * dx - px, ay + t * dy - py)
     if (distance > returnMetres) continue

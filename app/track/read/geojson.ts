@@ -2,7 +2,7 @@ import { type Node, type Run, readNode } from '~/track/read/geojson-nodes'
 import { JsonCursor, jsonSizeProblem } from '~/track/read/json'
 import { extraValues, heightsLeftOut, leftOut } from '~/track/read/notes'
 import { coordinateFits, coordinateProblem } from '~/track/read/numbers'
-import { type Content, type Line, Points, type Reading, tidyName } from '~/track/read/points'
+import { type Content, type Line, Points, type Reading, roomFor, tidyName } from '~/track/read/points'
 import { type Problem, problem, quoted, several } from '~/track/read/problems'
 
 const geometryLevels: ReadonlyMap<string, number> = new Map([
@@ -28,7 +28,7 @@ export function readGeoJson(text: string): Reading {
   const tooLarge = jsonSizeProblem(text)
   if (tooLarge) return { ok: false, problems: [tooLarge] }
   const json = new JsonCursor(text)
-  const points = new Points()
+  const points = new Points(roomFor(text.length, 6))
   if (json.isArray()) {
     const says = 'The file holds a list. GeoJSON is one object, such as a Feature or a FeatureCollection.'
     return { ok: false, problems: [problem('not-geojson', says, 'line 1')] }

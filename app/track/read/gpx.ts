@@ -7,7 +7,7 @@ import {
   instant,
   numberProblem,
 } from '~/track/read/numbers'
-import { type Line, mostPositions, Points, type Reading, tidyName } from '~/track/read/points'
+import { type Line, mostPositions, Points, type Reading, roomFor, tidyName } from '~/track/read/points'
 import { type Problem, problem, several } from '~/track/read/problems'
 import type { XmlPlace, XmlReader } from '~/track/read/xml'
 
@@ -21,7 +21,7 @@ const skipped = new Set(['extensions', 'link', 'author', 'copyright', 'bounds'])
  * height keep their place. A height or a time that cannot be read is left out.
  */
 export class GpxReader implements XmlReader {
-  private readonly points = new Points()
+  private readonly points: Points
   private readonly segments: Line[] = []
   private readonly routes: Line[] = []
   private readonly path: string[] = []
@@ -38,7 +38,13 @@ export class GpxReader implements XmlReader {
   private time = Number.NaN
   private heard = ''
 
-  constructor(private readonly place: XmlPlace) {}
+  /** @param bytes size of the file */
+  constructor(
+    private readonly place: XmlPlace,
+    bytes: number,
+  ) {
+    this.points = new Points(roomFor(bytes, 24))
+  }
 
   open(name: string, attributes: Readonly<Record<string, string>>): 'skip' | undefined {
     if (skipped.has(name)) return 'skip'

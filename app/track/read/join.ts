@@ -1,10 +1,10 @@
+import Flatbush from 'flatbush'
 import { type Flat, flatten, gapBetween, lengthAlong } from '~/track/read/on-plane'
 import { type Content, type Line, Points } from '~/track/read/points'
 import { inMetres, type Problem, problem, several } from '~/track/read/problems'
 import { type Metres, metres } from '~/track/units'
 
-/** Most pieces joined, and most of them named in a warning. */
-const mostPieces = 5000
+/** Most pieces named in a warning. */
 const mostNamed = 10
 /** Widest gap bridged between two pieces, in metres. */
 const widestGap = 60
@@ -55,10 +55,6 @@ const exit = (lines: readonly Line[], { piece, backwards }: Link) =>
  */
 export function joinPieces(content: Content, wanted?: readonly number[]): Joined | Problem {
   const { points, lines } = content
-  if (lines.length > mostPieces) {
-    const says = `The drawing comes in ${several(lines.length, 'piece')}; up to ${several(mostPieces, 'piece')} are joined. Save the circuit's line alone.`
-    return problem('too-many-pieces', says)
-  }
   const stranger = wanted?.find((index) => !lines[index - 1])
   if (stranger !== undefined || wanted?.length === 0) {
     const says = `There is no piece ${stranger ?? 'chosen'}: the drawing has ${several(lines.length, 'piece')}. Choose among them.`
@@ -89,12 +85,13 @@ function chainOf(flat: Flat, lines: readonly Line[], lengths: readonly number[],
   let longest = -1
   for (const piece of free) if (longest === -1 || lengths[piece]! > lengths[longest]!) longest = piece
   free.delete(longest)
+  const ends = endsOf(flat, lines)
   let chain: Link[] = [{ piece: longest, backwards: false }]
   let length = lengths[longest]!
   for (let turned = false; ; ) {
     const head = entry(lines, chain[0]!)
     const tail = exit(lines, chain.at(-1)!)
-    const next = nearest(flat, lines, free, chain.at(-1)!)
+    const next = nearest(flat, lines, ends, free, chain.at(-1)!)
     const home = length >= shortestRing ? gapBetween(flat, tail, head) : Number.POSITIVE_INFINITY
     const away = next ? gapBetween(flat, tail, entry(lines, next)) : Number.POSITIVE_INFINITY
     if (home <= widestGap && home <= away + samePlace) break
@@ -116,30 +113,35 @@ const turnedRound = (chain: readonly Link[]): Link[] =>
   chain.toReversed().map(({ piece, backwards }) => ({ piece, backwards: !backwards }))
 
 /** The free piece end nearest to where a link comes out; of those as near as that the one straightest ahead. */
-function nearest(flat: Flat, lines: readonly Line[], free: ReadonlySet<number>, from: Link): Link | undefined {
+function nearest(flat: Flat, lines: readonly Line[], ends: Flatbush, free: ReadonlySet<number>, from: Link) {
   const tail = exit(lines, from)
-  let least = Number.POSITIVE_INFINITY
-  for (const piece of free) {
-    const { start, end } = lines[piece]!
-    least = Math.min(least, gapBetween(flat, tail, start), gapBetween(flat, tail, end - 1))
-  }
-  if (least > widestGap) return undefined
-  const [ahead, aheadY] = heading(flat, lines, { piece: from.piece, backwards: !from.backwards })
+  const [x, y] = [flat.x[tail]!, flat.y[tail]!]
+  const isFree = (end: number) => free.has(end >> 1)
+  const links = ends
+    .search(x - widestGap, y - widestGap, x + widestGap, y + widestGap, isFree)
+    .map((end) => ({ piece: end >> 1, backwards: end % 2 === 1 }))
+  let least = widestGap
+  for (const link of links) least = Math.min(least, gapBetween(flat, tail, entry(lines, link)))
+  const [backX, backY] = heading(flat, lines, { piece: from.piece, backwards: !from.backwards })
   let best: Link | undefined
   let straightest = Number.NEGATIVE_INFINITY
-  for (const piece of free) {
-    for (const backwards of [false, true]) {
-      const link = { piece, backwards }
-      if (gapBetween(flat, tail, entry(lines, link)) > least + samePlace) continue
-      const [x, y] = heading(flat, lines, link)
-      const straight = -(x * ahead + y * aheadY)
-      if (straight > straightest) {
-        straightest = straight
-        best = link
-      }
-    }
+  for (const link of links) {
+    if (gapBetween(flat, tail, entry(lines, link)) > least + samePlace) continue
+    const [onX, onY] = heading(flat, lines, link)
+    const straight = -(onX * backX + onY * backY)
+    if (straight <= straightest) continue
+    straightest = straight
+    best = link
   }
   return best
+}
+
+/** Index of the pieces' ends: the front of piece k is item 2k, its back item 2k + 1. */
+function endsOf({ x, y }: Flat, lines: readonly Line[]): Flatbush {
+  const ends = new Flatbush(2 * lines.length)
+  for (const { start, end } of lines) for (const i of [start, end - 1]) ends.add(x[i]!, y[i]!)
+  ends.finish()
+  return ends
 }
 
 /** Unit vector from where a link goes in towards its inside. */
@@ -154,7 +156,7 @@ function heading(flat: Flat, lines: readonly Line[], link: Link): [number, numbe
 }
 
 function copyChain(points: Points, flat: Flat, lines: readonly Line[], chain: readonly Link[]): Points {
-  const joined = new Points()
+  const joined = new Points(points.length, points.hasWidths)
   let before = -1
   for (const link of chain) {
     const step = link.backwards ? -1 : 1

@@ -1,8 +1,8 @@
-import { straightDistance } from '~/track/plane'
+import { makePlane, straightDistance } from '~/track/plane'
 import { clean, pick } from '~/track/read/clean'
 import { type Crossing, crossingsOf } from '~/track/read/crossings'
 import { closingGap } from '~/track/read/laps'
-import { type Flat, flattenLayout, gapBetween } from '~/track/read/on-plane'
+import { cornersOf, type Flat, gapBetween, onPlane } from '~/track/read/on-plane'
 import type { Points } from '~/track/read/points'
 import { inMetres, type Problem, problem, several } from '~/track/read/problems'
 
@@ -27,12 +27,13 @@ export type Judgement =
 export function judge(points: Points, { isLap, close }: { isLap: boolean; close: boolean }): Judgement {
   const refuse = (found: Problem): Judgement => ({ ok: false, problems: [found] })
   if (points.length < fewestPositions) return refuse(tooFew(points.length))
-  const reach = farthest(points)
-  if (reach > longest) {
-    const says = `The line reaches ${inMetres(reach)} from its first position; a circuit is at most ${inMetres(longest)} long. Save one lap alone, or take the stray position out.`
+  const corners = cornersOf(points)
+  const spread = straightDistance(...corners)
+  if (spread > longest) {
+    const says = `The line spreads over ${inMetres(spread)}; a circuit is at most ${inMetres(longest)} long. Save one lap alone, or take the stray position out.`
     return refuse(problem('too-long', says))
   }
-  const whole = flattenLayout(points)
+  const whole = onPlane(points, makePlane([...corners]))
   const { kept, closed, warnings } = clean(whole)
   if (kept.length < fewestPositions) return refuse(tooFew(kept.length))
   const chosen = pick(points, whole, kept)
@@ -47,14 +48,6 @@ export function judge(points: Points, { isLap, close }: { isLap: boolean; close:
   if (found.length === 0) found.push(...crossingProblems(chosen.flat, along))
   if (found.length > 0) return { ok: false, problems: found }
   return { ok: true, points: chosen.points, warnings: mended ? [...warnings, closedWarning(gap)] : warnings }
-}
-
-function farthest({ lon, lat, length }: Points): number {
-  let reach = 0
-  for (let i = 1; i < length; i++) {
-    reach = Math.max(reach, straightDistance([lon[0]!, lat[0]!], [lon[i]!, lat[i]!]))
-  }
-  return reach
 }
 
 /** Metres from the first position to each, and round to the first again. */

@@ -1,7 +1,7 @@
 import { readTuples } from '~/track/read/kml-coordinates'
 import { extraValues, heightsLeftOut, leftOut, tooManyPositions } from '~/track/read/notes'
 import { coordinateFits, coordinateProblem, decimal, instant, numberProblem } from '~/track/read/numbers'
-import { type Line, mostPositions, Points, type Reading, tidyName } from '~/track/read/points'
+import { type Line, mostPositions, Points, type Reading, roomFor, tidyName } from '~/track/read/points'
 import { type Problem, problem, several } from '~/track/read/problems'
 import type { XmlPlace, XmlReader } from '~/track/read/xml'
 
@@ -23,7 +23,7 @@ const heard = new Set(['name', 'coordinates', 'coord', 'when', 'altitudeMode'])
  * level. A blank gx:coord (a pause) begins a new stretch.
  */
 export class KmlReader implements XmlReader {
-  private readonly points = new Points()
+  private readonly points: Points
   private readonly lines: Line[] = []
   private readonly rings: Line[] = []
   private readonly tracks: Line[] = []
@@ -43,7 +43,13 @@ export class KmlReader implements XmlReader {
   private blanks = false
   private extra = 0
 
-  constructor(private readonly place: XmlPlace) {}
+  /** @param bytes size of the file */
+  constructor(
+    private readonly place: XmlPlace,
+    bytes: number,
+  ) {
+    this.points = new Points(roomFor(bytes, 4))
+  }
 
   open(name: string): 'skip' | undefined {
     if (skipped.has(name)) return 'skip'

@@ -10,7 +10,7 @@ const longestGap = 2
 const fastest = 150
 /** A line closes by itself where its ends lie within this many metres. */
 export const closingGap = 60
-/** A round shorter than this part of a line that closes by itself is a loop in it, not a lap. */
+/** A round shorter than this part of a line that closes by itself is a loop in it, not the lap. */
 const wholeLap = 0.8
 
 /** One lap of a trace, as offered. */
@@ -53,7 +53,7 @@ export function chooseLap(content: Content, wanted?: number): Choice | Problem |
   const flat = flatten(points)
   const { rounds, interrupted } = findRounds(flat, lines)
   const closed = lines.filter(({ start, end }) => isClosed(flat, start, end))
-  const found = isLoopOnly(rounds, closed, lines, flat) ? [] : rounds
+  const found = isWhole(rounds, closed, lines, flat) ? [] : rounds
   const whole = closed.map(({ start, end }) => ({ start, end, next: undefined }))
   const laps = (found.length > 0 ? found : whole).map((round, i) => measure(points, flat, round, i + 1))
   if (laps.length > 0) {
@@ -69,12 +69,16 @@ export function chooseLap(content: Content, wanted?: number): Choice | Problem |
 const isClosed = (flat: Flat, start: number, end: number) =>
   gapBetween(flat, start, end - 1) < closingGap && lengthAlong(flat, start, end) >= 300
 
-/** Whether the only round found is a loop within a line that closes by itself. */
-function isLoopOnly(rounds: readonly Round[], closed: readonly Line[], lines: readonly Line[], flat: Flat): boolean {
+/**
+ * Whether a line that closes by itself is to be taken whole although one round was found in it: the round is a loop within
+ * it, or goes to the line's end, so that nothing is driven twice.
+ */
+function isWhole(rounds: readonly Round[], closed: readonly Line[], lines: readonly Line[], flat: Flat): boolean {
   const [only, another] = rounds
-  if (!only || another || lines.length > 1 || closed.length === 0) return false
-  const [line] = lines
-  return lengthAlong(flat, only.start, only.end) < wholeLap * lengthAlong(flat, line!.start, line!.end)
+  const [line, other] = lines
+  if (!only || another || !line || other || closed.length === 0) return false
+  const toTheEnd = (only.next ?? line.end) >= line.end - 1
+  return toTheEnd || lengthAlong(flat, only.start, only.end) < wholeLap * lengthAlong(flat, line.start, line.end)
 }
 
 function measure(points: Points, flat: Flat, round: Round, index: number): Found {

@@ -24,19 +24,26 @@ export function decimalWithComma(text: string): number {
   return hasDecimalComma(text) ? decimal(text.replace(',', '.')) : decimal(text)
 }
 
-const dateTime = /^(\d{4})-(\d\d)-(\d\d)[T ](\d\d):(\d\d):(\d\d(?:[.,]\d+)?)(Z|[+-]\d\d:?\d\d)?$/
+const dateTime = /^\d{4}-\d\d-\d\d[T ]\d\d:\d\d:\d\d(?:[.,]\d{1,12})?(?:Z|[+-]\d\d:?\d\d)?$/
 
 /** Seconds since 1970 of an xsd:dateTime; without a zone it is UTC (GPX 1.1). NaN where it is none. */
 export function instant(text: string): number {
-  const match = dateTime.exec(text)
-  if (!match) return Number.NaN
-  const [year, month, day, hour, minute] = match.slice(1, 6).map(Number) as [number, number, number, number, number]
+  if (text.length < 19 || !dateTime.test(text)) return Number.NaN
+  const part = (from: number, to: number) => Number(text.slice(from, to))
+  const [month, day, hour, minute] = [part(5, 7), part(8, 10), part(11, 13), part(14, 16)]
   if (month < 1 || month > 12 || day < 1 || day > 31 || hour > 24 || minute > 59) return Number.NaN
-  const zone = match[7] ?? 'Z'
-  const sign = zone.startsWith('-') ? -1 : 1
+  let end = 19
+  while (end < text.length && !'Z+-'.includes(text[end]!)) end++
+  const fraction = Number(text.slice(17, end).replace(',', '.'))
+  return Date.UTC(part(0, 4), month - 1, day, hour, minute) / 1000 + fraction - zoneSeconds(text.slice(end))
+}
+
+/** Seconds that a zone such as "+02:00" is ahead of UTC. */
+function zoneSeconds(zone: string): number {
+  if (zone === '' || zone === 'Z') return 0
   const digits = zone.replace(/\D/g, '')
-  const ahead = zone === 'Z' ? 0 : sign * (Number(digits.slice(0, 2)) * 3600 + Number(digits.slice(2)) * 60)
-  return Date.UTC(year, month - 1, day, hour, minute) / 1000 + Number(match[6]!.replace(',', '.')) - ahead
+  const ahead = Number(digits.slice(0, 2)) * 3600 + Number(digits.slice(2)) * 60
+  return zone.startsWith('-') ? -ahead : ahead
 }
 
 /**

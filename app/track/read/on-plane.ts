@@ -31,10 +31,9 @@ export function flatten(points: Points): Flat {
   return onPlane(points, makePlane([[lon[0]! + middle(eastward), middle(latitudes)]]))
 }
 
-/** Takes positions to the tangent plane at the middle of their bounding box. */
-export function flattenLayout(points: Points): Flat {
+/** South-west and north-east corners of the positions' bounding box, longitudes the short way round from the first one. */
+export function cornersOf(points: Points): readonly [LngLat, LngLat] {
   const { lon, lat, length } = points
-  const corners: LngLat[] = []
   let [west, east, south, north] = [0, 0, 90, -90]
   for (let i = 0; i < length; i++) {
     const ahead = lon[i]! - lon[0]!
@@ -44,11 +43,14 @@ export function flattenLayout(points: Points): Flat {
     south = Math.min(south, lat[i]!)
     north = Math.max(north, lat[i]!)
   }
-  corners.push([lon[0]!, lat[0]!], [lon[0]! + west, south], [lon[0]! + east, north])
-  return onPlane(points, makePlane(corners))
+  return [
+    [lon[0]! + west, south],
+    [lon[0]! + east, north],
+  ]
 }
 
-function onPlane(points: Points, plane: ReturnType<typeof makePlane>): Flat {
+/** Takes positions to a tangent plane. */
+export function onPlane(points: Points, plane: ReturnType<typeof makePlane>): Flat {
   const x = new Float64Array(points.length)
   const y = new Float64Array(points.length)
   for (let i = 0; i < points.length; i++) {
@@ -60,7 +62,11 @@ function onPlane(points: Points, plane: ReturnType<typeof makePlane>): Flat {
 }
 
 /** Metres between two positions of a plane. */
-export const gapBetween = ({ x, y }: Flat, i: number, k: number) => Math.hypot(x[k]! - x[i]!, y[k]! - y[i]!)
+export function gapBetween({ x, y }: Flat, i: number, k: number): number {
+  const east = x[k]! - x[i]!
+  const north = y[k]! - y[i]!
+  return Math.sqrt(east * east + north * north)
+}
 
 /** Metres along positions `start` ≤ i < `end`. */
 export function lengthAlong(flat: Flat, start: number, end: number): number {

@@ -9,12 +9,29 @@ export const mostPositions = 1_000_000
  */
 export class Points {
   length = 0
-  lon = new Float64Array(256)
-  lat = new Float64Array(256)
-  height = new Float64Array(256)
-  time = new Float64Array(256)
-  right = new Float64Array(256)
-  left = new Float64Array(256)
+  lon: Float64Array
+  lat: Float64Array
+  height: Float64Array
+  time: Float64Array
+  right: Float64Array
+  left: Float64Array
+
+  /**
+   * @param room positions there is room for at once; it grows beyond
+   * @param hasWidths whether widths are kept; their columns are empty otherwise
+   */
+  constructor(
+    room = 256,
+    readonly hasWidths = false,
+  ) {
+    const column = (length: number) => new Float64Array(length)
+    this.lon = column(room)
+    this.lat = column(room)
+    this.height = column(room)
+    this.time = column(room)
+    this.right = column(hasWidths ? room : 0)
+    this.left = column(hasWidths ? room : 0)
+  }
 
   push(lon: number, lat: number, height = Number.NaN, time = Number.NaN, right = Number.NaN, left = Number.NaN): void {
     if (this.length === this.lon.length) this.grow()
@@ -23,6 +40,7 @@ export class Points {
     this.lat[i] = lat
     this.height[i] = height
     this.time[i] = time
+    if (!this.hasWidths) return
     this.right[i] = right
     this.left[i] = left
   }
@@ -34,7 +52,7 @@ export class Points {
 
   private grow(): void {
     const larger = (column: Float64Array) => {
-      const next = new Float64Array(column.length * 2)
+      const next = new Float64Array(column.length * 2 + 8)
       next.set(column)
       return next
     }
@@ -42,10 +60,18 @@ export class Points {
     this.lat = larger(this.lat)
     this.height = larger(this.height)
     this.time = larger(this.time)
+    if (!this.hasWidths) return
     this.right = larger(this.right)
     this.left = larger(this.left)
   }
 }
+
+/**
+ * Room for the positions that so many bytes can hold, up to the most that are read and one more. Room costs no memory
+ * until it is filled.
+ * @param fewest bytes that one position takes at least
+ */
+export const roomFor = (bytes: number, fewest: number) => Math.min(mostPositions, Math.floor(bytes / fewest)) + 1
 
 /** A run of positions `start` ≤ i < `end` that the file draws as one line. */
 export interface Line {

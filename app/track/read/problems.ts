@@ -34,6 +34,7 @@ export type ProblemCode =
   | 'xml-doctype'
   | 'xml-broken'
   | 'xml-too-deep'
+  | 'xml-too-many-elements'
   | 'coordinates-broken'
   | 'blanks-in-coordinates'
   // CSV

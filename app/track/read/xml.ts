@@ -1,9 +1,14 @@
 import { SaxesParser } from 'saxes'
-import { type Problem, problem } from '~/track/read/problems'
+import { count, type Problem, problem } from '~/track/read/problems'
 
 /** Deepest nesting of elements, and most attributes of one element. */
 const deepest = 64
 const mostAttributes = 64
+/** Most elements, and most prefixes that are declared. */
+const mostElements = 2_000_000
+const mostPrefixes = 100
+/** Longest run of text before the first element: a declaration and a comment. */
+const longestProlog = 64 * 1024
 /** Bytes given to the parser at a time: a refusal stops the walk within one of them. */
 const chunkBytes = 32 * 1024
 
@@ -26,7 +31,7 @@ export interface XmlPlace {
  * Streams an XML document through a reader chosen by its root element. Elements count by their local name; those whose
  * prefix is bound to a namespace that is not one of `namespaces` (nor the root's own) are left out with all in them. A
  * prefix that is bound to nothing is taken as if it were not there. A document type declaration, broken XML, nesting
- * deeper than 64 or more than 64 attributes in one element end the walk.
+ * deeper than 64, more than 64 attributes in one element, more than 2,000,000 elements or 100 prefixes end the walk.
  */
 export function walkXml(
   body: Uint8Array,
@@ -49,30 +54,41 @@ class Walk {
   private reader: XmlReader | undefined
   private depth = 0
   private attributes = 0
+  private elements = 0
+  private prolog = 0
+  private hasDoctype = false
+  /** Whether the element at hand declares a namespace. */
+  private declares = false
+  /** Local names of the open elements. */
+  private readonly path: string[] = []
   /** Depth at which a left-out element stands; Infinity where none is open. */
   private skippedFrom = Number.POSITIVE_INFINITY
   /** Namespace bindings in force: undone as their element closes. */
   private readonly bound = new Map<string, string>()
+  private readonly prefixes = new Set<string>()
   private readonly undo: { depth: number; prefix: string; uri: string | undefined }[] = []
 
   constructor(
     private readonly namespaces: Set<string>,
     private readonly readerFor: (root: string, place: XmlPlace) => XmlReader | Problem,
   ) {
+    // Seven handlers at most: with an eighth V8 keeps the parser's properties in a dictionary, and it runs four times slower.
     this.parser.on('error', (error) => this.stop(brokenXml(error.message, this.where())))
     this.parser.on('doctype', (text) => this.stop(doctypeProblem(text, this.where())))
-    this.parser.on('opentagstart', () => {
-      this.attributes = 0
-    })
-    this.parser.on('attribute', () => {
+    this.parser.on('attribute', ({ name }) => {
+      if (name.startsWith('xmlns')) this.declares = true
       if (++this.attributes > mostAttributes) {
         this.stop(
           problem('xml-broken', `An element has more than ${mostAttributes} attributes. Save it again.`, this.where()),
         )
       }
     })
-    this.parser.on('opentag', (tag) => this.open(tag.name, tag.attributes as Record<string, string>))
-    this.parser.on('closetag', (tag) => this.close(tag.name))
+    this.parser.on('opentag', (tag) => {
+      this.open(tag.name, tag.attributes as Record<string, string>)
+      this.attributes = 0
+      this.declares = false
+    })
+    this.parser.on('closetag', () => this.close())
     const text = (part: string) => {
       if (!this.found && this.depth < this.skippedFrom) this.reader?.text(part)
     }
@@ -88,6 +104,12 @@ class Walk {
 
   write(text: string): void {
     this.parser.write(text)
+    if (this.elements > 0 || this.found) return
+    // The parser tells of a document type declaration only at its end, which may be far.
+    this.hasDoctype ||= text.includes('<!DOCTYPE')
+    this.prolog += text.length
+    if (this.prolog <= longestProlog) return
+    this.stop(this.hasDoctype ? doctypeProblem('', this.where()) : brokenXml('no element begins in it', this.where()))
   }
 
   end(): void {
@@ -102,9 +124,15 @@ class Walk {
       this.stop(problem('xml-too-deep', says, this.where()))
       return
     }
-    if (this.depth >= this.skippedFrom) return
-    this.bind(attributes)
+    if (++this.elements > mostElements) {
+      const says = `The file holds more than ${count(mostElements)} elements. Save one lap, or the line alone.`
+      this.stop(problem('xml-too-many-elements', says, this.where()))
+      return
+    }
     const [prefix, local] = splitName(name)
+    this.path.push(local)
+    if (this.depth >= this.skippedFrom) return
+    if (this.declares) this.bind(attributes)
     if (!this.reader) {
       this.begin(prefix, local)
       return
@@ -132,12 +160,18 @@ class Walk {
       const prefix = key === 'xmlns' ? '' : key.slice(6)
       this.undo.push({ depth: this.depth, prefix, uri: this.bound.get(prefix) })
       this.bound.set(prefix, attributes[key]!)
+      this.prefixes.add(prefix)
+    }
+    if (this.prefixes.size > mostPrefixes) {
+      const says = `The file declares more than ${mostPrefixes} prefixes. Save the line alone.`
+      this.stop(problem('xml-broken', says, this.where()))
     }
   }
 
-  private close(name: string): void {
+  private close(): void {
     if (this.found) return
-    if (this.depth < this.skippedFrom) this.reader?.close(splitName(name)[1])
+    const local = this.path.pop()!
+    if (this.depth < this.skippedFrom) this.reader?.close(local)
     else if (this.depth === this.skippedFrom) this.skippedFrom = Number.POSITIVE_INFINITY
     for (let last = this.undo.at(-1); last?.depth === this.depth; last = this.undo.at(-1)) {
       this.undo.pop()
