@@ -22,7 +22,7 @@ export function endCommands() {
 export function capture(command, { cwd = root, env, input, log } = {}) {
   const [program, ...rest] = command
   return new Promise((resolve) => {
-    const child = spawn(program, rest, { cwd, env: { ...process.env, ...env }, stdio: 'pipe' })
+    const child = spawn(program, rest, { cwd, env: { ...process.env, NO_COLOR: '1', ...env }, stdio: 'pipe' })
     const file = log ? createWriteStream(logFile(log)) : undefined
     running.add(child)
     let stdout = ''
@@ -64,7 +64,7 @@ export async function must(failure, command, options = {}) {
   if (result.code === 0) return result
   const reason = knownReason(result.output)
   if (reason) throw new Stop(`${failure} ${reason}`)
-  throw new Stop(failure, tail(result.output, 15))
+  throw new Stop(failure, tail(result.output, 40))
 }
 
 /** The command as the user that owns the databases: PostgreSQL refuses root. */

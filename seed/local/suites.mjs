@@ -62,7 +62,7 @@ export async function vitest(name, projects, env = {}) {
     '--reporter=json',
     `--outputFile.json=${file}`,
   ]
-  const { code, output } = await capture(command, { env: { ...env, NO_COLOR: '1' }, log: name })
+  const { code, output } = await capture(command, { env, log: name })
   return { count: countVitest(file, code), output }
 }
 
@@ -70,7 +70,7 @@ export async function vitest(name, projects, env = {}) {
 export async function playwright(env) {
   const file = reportFile('e2e')
   const { code, output } = await capture([bin('playwright'), 'test', '--reporter=list,json'], {
-    env: { ...env, PLAYWRIGHT_JSON_OUTPUT_FILE: file, NO_COLOR: '1' },
+    env: { ...env, PLAYWRIGHT_JSON_OUTPUT_FILE: file },
     log: 'e2e',
   })
   return { count: countPlaywright(file, code), output }

@@ -1,83 +1,11 @@
-import { readdirSync } from 'node:fs'
-import { join } from 'node:path'
-import { ensureBuild } from './build.mjs'
-import { startProcess, untilHealthy } from './children.mjs'
-import { Cluster } from './cluster.mjs'
 import { single, sum } from './counts.mjs'
-import { ensureDatabase } from './database.mjs'
-import { seedDemo } from './demo.mjs'
-import { alone, atEnd, isAlive, nameOf } from './lifetime.mjs'
-import { testClusters } from './places.mjs'
-import { freePort } from './ports.mjs'
-import { migrate, prepareFolders, prepareTools } from './prepare.mjs'
-import { newPassword } from './secrets.mjs'
+import { alone } from './lifetime.mjs'
+import { prepareFolders, prepareTools } from './prepare.mjs'
 import { Stop, step } from './steps.mjs'
 import * as suites from './suites.mjs'
+import { testHouse } from './test-house.mjs'
 
 process.env.TZ = 'Pacific/Auckland'
-
-const passwords = { owner: newPassword(), app: newPassword() }
-const demoPassword = newPassword(9)
-
-/** A cluster for this run alone; what killed runs left behind is removed. */
-async function throwAwayCluster() {
-  for (const name of readdirSync(testClusters)) {
-    if (!isAlive(name)) await new Cluster(join(testClusters, name)).destroy()
-  }
-  const cluster = new Cluster(join(testClusters, nameOf(process.pid)), { throwAway: true })
-  atEnd(() => cluster.destroy())
-  await cluster.start()
-  return cluster
-}
-
-const urlsOf = ({ appUrl, ownerUrl }) => ({ DATABASE_URL: appUrl, OWNER_DATABASE_URL: ownerUrl })
-
-async function migrated(cluster, name) {
-  const urls = await ensureDatabase(cluster, name, passwords)
-  await migrate(urlsOf(urls))
-  return urls
-}
-
-/** Starts a web server on a database and gives what tests must know of it. */
-async function serve(name, urls) {
-  const port = await freePort()
-  const baseUrl = `http://localhost:${port}`
-  const env = { NODE_ENV: 'production', LOG_LEVEL: 'info', PORT: String(port), PUBLIC_URL: baseUrl }
-  const web = startProcess(['build/server/index.js'], { ...env, DATABASE_URL: urls.appUrl }, name)
-  await untilHealthy(baseUrl, web)
-  return {
-    TEST_BASE_URL: baseUrl,
-    TEST_DATABASE_URL: urls.appUrl,
-    TEST_OWNER_DATABASE_URL: urls.ownerUrl,
-    DEMO_PASSWORD: demoPassword,
-  }
-}
-
-/** What the later suites share, each made when first asked for. */
-function house() {
-  const once = (make) => {
-    let made
-    return () => {
-      made ??= make()
-      return made
-    }
-  }
-  const cluster = once(throwAwayCluster)
-  const build = once(() => alone(ensureBuild))
-  const demo = once(async () => {
-    await build()
-    const urls = await migrated(await cluster(), 'demo')
-    await seedDemo({ ...urlsOf(urls), DEMO_PASSWORD: demoPassword })
-    return urls
-  })
-  /** A copy of the demo's database, so that one suite does not see what another changed. */
-  const served = async (name) => {
-    await demo()
-    await (await cluster()).sql('postgres', `create database ${name} template demo owner turnstone_owner`)
-    return serve(`web-${name}`, await ensureDatabase(await cluster(), name, passwords))
-  }
-  return { cluster, build, served }
-}
 
 const statics = {
   types: suites.types,
@@ -90,15 +18,14 @@ const statics = {
   faults: () => suites.vitest('faults', ['faults']),
 }
 
-function dynamics({ cluster, build, served }) {
+function dynamics({ build, empty, served }) {
   return {
     build: async () => {
       await build()
       return { count: single(true), output: '' }
     },
     db: async () => {
-      await build()
-      const urls = await migrated(await cluster(), 'rows')
+      const urls = await empty('rows')
       const env = { TEST_DATABASE_URL: urls.appUrl, TEST_OWNER_DATABASE_URL: urls.ownerUrl }
       return suites.vitest('db', ['db'], env)
     },
@@ -134,7 +61,7 @@ async function runSuite(name, run) {
 export async function testAll(only) {
   prepareFolders()
   await alone(() => prepareTools(['postgresql', 'chromium']))
-  const all = { ...statics, ...dynamics(house()) }
+  const all = { ...statics, ...dynamics(testHouse()) }
   const unknown = only.filter((name) => !(name in all))
   if (unknown.length > 0)
     throw new Stop(`No such suite: ${unknown.join(', ')}. There are: ${Object.keys(all).join(', ')}`)
