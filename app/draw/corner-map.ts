@@ -16,7 +16,6 @@ import { SIDE_THINGS } from '~/draw/side-things'
 import type { Reader } from '~/draw/text-styles'
 import { thingBoxes, thingNames } from '~/draw/thing-names'
 import { drawThings, type Thing, thingsIn, thingsOf } from '~/draw/things'
-import type { PlanePoint } from '~/track/plane'
 import { type Offset, type Station, station } from '~/track/units'
 
 /** What lies round a corner's road: the same for every view of it. */
@@ -54,8 +53,9 @@ export function cornerScene(scene: Omit<CornerScene, 'waters'>): CornerScene {
   return { ...scene, waters: watersOf(scene.ground, scene.road.lap()) }
 }
 
-/** From this scale on a corner's road shows its detail, px per metre; nearer than this is not asked for. */
-const DETAIL = 0.5
+/** From this scale on a corner's road shows its detail, px per metre. */
+export const DETAIL = 0.5
+/** Nearer than this a first view does not go. */
 const NEAREST = 8
 const MARGIN = 34
 
@@ -123,22 +123,25 @@ export function cornerReading(scene: CornerScene, reading: CornerReading, projec
   const driven = reading.driven.map(({ station: at, offset }) => projection.toPx(road.at(at, offset)))
   return [
     ...(driven.length < 2 ? [] : [polyline('driven-line', driven)]),
-    ...(datum === null ? [] : datumShapes(datum, road, projection, reading.reader)),
+    ...(datum === null ? [] : datumShapes(scene, datum, projection, reading.reader)),
     ...aimShapes(scene, reading, placed, projection),
     ...tetherShapes(placed),
   ]
 }
 
 /** The zero: dots across the road, and its figure on the outside of the bend. */
-function datumShapes(datum: Station, road: Road, projection: Projection, reader: Reader): Shape[] {
+function datumShapes(
+  { road, direction }: CornerScene,
+  datum: Station,
+  projection: Projection,
+  reader: Reader,
+): Shape[] {
   const line = acrossRoad(road, projection, datum, 4) as [Point, Point]
-  return [path('datum', blocksOf(line, 2)), ...zero(line[0], line[1], reader)]
-}
-
-function zero(left: Point, right: Point, reader: Reader): Shape[] {
-  const length = Math.hypot(left[0] - right[0], left[1] - right[1]) || 1
-  const at: Point = [left[0] + ((left[0] - right[0]) / length) * 9, left[1] + ((left[1] - right[1]) / length) * 9]
-  return [text('axis-zero', [at[0], at[1] + 4.5], '0', { anchor: 'middle', halo: 'sand', reader })]
+  const [x, y] = acrossRoad(road, projection, datum, 13)[direction === 'right' ? 0 : 1]!
+  return [
+    path('datum', blocksOf(line, 2)),
+    text('axis-zero', [x, y + 4.5], '0', { anchor: 'middle', halo: 'sand', reader }),
+  ]
 }
 
 function aimShapes(
@@ -221,9 +224,3 @@ export function cornerMap(
     ],
   }
 }
-
-/** The picture's middle and scale, for a map that goes on from a still picture. */
-export const viewOf = ({ middle, pxPerMetre }: Projection): { middle: PlanePoint; pxPerMetre: number } => ({
-  middle,
-  pxPerMetre,
-})

@@ -43,7 +43,7 @@ function places({ at, turn }: PlacedMark, size: { width: number; height: number 
 
 /**
  * Labels of the marks looked at, one for a mark with two places (its real one). None overlaps another or any glyph, none
- * lies on the road; one that finds no place is left out. Marks never move.
+ * lies on the road, no leader runs through another or through a board; one that finds no place is left out. Marks never move.
  */
 export function markLabels(placed: readonly PlacedMark[], room: Room, reader: Reader): MarkLabel[] {
   const own = placed.filter(
@@ -56,13 +56,14 @@ export function markLabels(placed: readonly PlacedMark[], room: Room, reader: Re
   const glyphs = placed.map(({ at: [x, y] }) => ({ x: x - 9, y: y - 9, width: 18, height: 18 }))
   const labels: MarkLabel[] = []
   for (const mark of order) {
-    const taken = [...glyphs, ...room.boxes, ...labels.map(({ box }) => box)]
+    const blocking = [...room.boxes, ...labels.map(({ box }) => box)]
+    const taken = [...glyphs, ...blocking]
     const box = places(mark, sizeOf(mark, reader)).find(
       (place) =>
         holds(room.sheet, place) &&
         !taken.some((other) => overlap(other, place, 2)) &&
         !room.lines.some(({ points, clearance }) => lineNearBox(points, place, clearance)) &&
-        !labels.some((other) => crosses(other, mark.at, place)),
+        !blocking.some((other) => lineNearBox([mark.at, nearestOf(place, mark.at)], other, 1)),
     )
     if (box) labels.push({ mark, box, shapes: labelShapes(mark, box, reader) })
   }
@@ -74,9 +75,6 @@ const nearestOf = (box: Box, [x, y]: Point): Point => [
   Math.min(Math.max(x, box.x), box.x + box.width),
   Math.min(Math.max(y, box.y), box.y + box.height),
 ]
-
-/** Whether the leader to a new place would run through a label that is already set. */
-const crosses = (label: MarkLabel, at: Point, place: Box) => lineNearBox([at, nearestOf(place, at)], label.box, 1)
 
 function labelShapes({ mark, place, at }: PlacedMark, box: Box, reader: Reader): Shape[] {
   const size = textSize('mark-figure', reader)
