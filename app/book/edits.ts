@@ -5,7 +5,6 @@ import type { BrakeRole, Ground, Manner, MarkKind } from './kinds'
 import type { FieldChange, Json, Operation, Scope } from './operation'
 import { OPERATION_VERSION } from './operation'
 import type { Place } from './place'
-import type { PlaceView } from './view'
 
 /** What a person does on a page, turned into operations. Ids and the instant come from whoever does it. */
 
@@ -105,7 +104,7 @@ export function dropMark(making: Making, mark: MarkId): Operation {
 }
 
 /** A place nudged along the road (forward positive) and across it (left positive), in metres. */
-export function nudged(place: PlaceView, by: { ahead: number; left: number }, frame: LapFrame): GivenPlace {
+export function nudged(place: GivenPlace, by: { ahead: number; left: number }, frame: LapFrame): GivenPlace {
   return { station: station(wrap(place.station + by.ahead, frame.length)), offset: offset(place.offset + by.left) }
 }
 

@@ -1,7 +1,7 @@
 import type { Ground } from '~/book/kinds'
 import type { RefusalCode } from '~/book/operation'
-import type { Metres, Offset } from '~/track/units'
-import { formatToDatum, NBSP } from './measures'
+import { type Metres, metres, type Offset } from '~/track/units'
+import { formatMetres, formatToDatum, NBSP } from './measures'
 
 /** The sentences of the corner page. */
 
@@ -51,6 +51,8 @@ export const corner = {
     'Metres and seconds to the next mark run along the line through the marks; seconds from the speeds at the marks.',
   caution:
     'Simulator marks are not proven on the real surface. Seen on foot is not a proven braking distance. Officials, flags and the drivers’ briefing come first.',
+  mapLabel: (name: string) => `Map of ${name}`,
+  mapDescription: 'The road with its landmarks and marks. The table below tells the same in road order.',
   mapHint: `Tap the map to add. Drag a mark, or focus it and press an arrow key: 1${NBSP}m along or across, 10${NBSP}m with Shift.`,
   form: {
     kind: 'Choose what happens here.',
@@ -64,6 +66,15 @@ export const corner = {
     stale: 'The page is from before a change. Load it again.',
   },
 }
+
+/** Words of the corner's map. */
+export const cornerMapWords = (name: string) => ({
+  metres: (value: number) => formatMetres(metres(value)),
+  label: `Map of ${name}`,
+  closer: 'Closer',
+  further: 'Further off',
+  whole: 'Whole corner',
+})
 
 const REFUSALS: Record<RefusalCode, string> = {
   'not-a-member': 'You are not in this team any more.',

@@ -10,7 +10,6 @@ import type {
   StretchKind,
   TurnDirection,
 } from '~/book/kinds'
-import { formatGear } from './measures'
 
 /** The closed vocabularies of a book, in the words of drivers. */
 
@@ -38,10 +37,8 @@ export function markKind(kind: MarkKind, role: BrakeRole | null = null, gear: nu
 
 const NUMBERS = ['none', 'one', 'two', 'three', 'four', 'five']
 
-/** A change of gear: "down two to 3rd". */
-export function gearChange(downshifts: number, gear: number): string {
-  return `down ${NUMBERS[downshifts] ?? downshifts} to ${formatGear(gear)}`
-}
+/** How many gears a change goes: "down two". */
+export const downBy = (downshifts: number): string => `down ${NUMBERS[downshifts] ?? downshifts}`
 
 const PROOF_WORDS: Record<Proof, string> = { told: 'told', seen: 'seen on foot', driven: 'driven' }
 export const proofWord = (proof: Proof): string => PROOF_WORDS[proof]

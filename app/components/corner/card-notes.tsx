@@ -1,6 +1,6 @@
 import { Link } from 'react-router'
 import type { CardView } from '~/book/view'
-import { gearChange } from '~/words/kinds'
+import { downBy } from '~/words/kinds'
 import { formatGear, formatSpeed } from '~/words/measures'
 import type { CornerPageData } from './page-data'
 
@@ -72,9 +72,7 @@ function gearWords(card: CardView): string {
   if (card.gearIn === null || card.gearOut === null) return capital(speed)
   const down = card.gearIn - card.gearOut
   const gears =
-    down > 0
-      ? `${formatGear(card.gearIn)} to ${formatGear(card.gearOut)}, ${gearChange(down, card.gearOut).split(' to ')[0]}`
-      : formatGear(card.gearOut)
+    down > 0 ? `${formatGear(card.gearIn)} to ${formatGear(card.gearOut)}, ${downBy(down)}` : formatGear(card.gearOut)
   return speed ? `${gears}. ${capital(speed)}` : gears
 }
 

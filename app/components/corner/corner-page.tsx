@@ -1,6 +1,6 @@
 import type { SubmissionResult } from '@conform-to/react'
 import { Suspense } from 'react'
-import { Link, useSearchParams } from 'react-router'
+import { Link, useNavigate, useSearchParams } from 'react-router'
 import { GROUNDS, type Ground } from '~/book/kinds'
 import { Icon } from '~/components/ui/icon'
 import { corner as words } from '~/words/corner'
@@ -27,13 +27,17 @@ export function CornerPage({ page, result, lastResult }: CornerPageProps) {
   const { open, linkWith } = useOpenForm()
   const corner = page.cut.corner
   const closeTo = linkWith({ add: null, mark: null })
+  const navigate = useNavigate()
+  const go = (to: string) => navigate(to, { preventScrollReset: true, replace: true })
+  const onSelect = (mark: string) => go(linkWith({ mark, add: null }))
+  const onAdd = (place: TypedPlace) => go(linkWith({ ...place, add: '1', mark: null }))
   return (
     <main className="corner-page">
       <div className="corner-main">
         <CornerHead page={page} linkWith={linkWith} />
         {result ? <Outcome {...{ result, closeTo }} operation={page.ids.operation} /> : null}
         <Suspense fallback={<div className="map-panel waiting" />}>
-          <MapPanel page={page} />
+          <MapPanel {...{ page, closeTo }} selected={open.mark} onAdd={onAdd} onSelect={onSelect} />
         </Suspense>
         <OpenForm {...{ page, open, closeTo, lastResult }} />
         {page.lines.length > 0 ? (

@@ -1,16 +1,44 @@
 import { useMemo } from 'react'
-import { makeFrame } from '~/track/layout-frame'
-import { along } from '~/track/units'
-import { useCentreline, useGround } from '../geometry/geometry-store'
+import { useSheetWidth } from '~/components/geometry/sheet-width'
+import { LiveOverStill } from '~/components/map/live-over-still'
+import { cornerMap } from '~/draw/corner-map'
+import { cornerMapWords, corner as words } from '~/words/corner'
+import { LiveMap } from './live-map'
+import { Outcome } from './outcome'
 import type { CornerPageData } from './page-data'
+import type { TypedPlace } from './typed-place'
+import { useCornerDrawing, useFrame } from './use-corner-drawing'
+import { usePlaceEdits } from './use-place-edits'
 
-export function MapPanel({ page }: { page: CornerPageData }) {
-  const { layout } = page.cut
-  const centreline = useCentreline(page.team, layout.centreline)
-  useGround(page.team, layout.ground)
-  const frame = useMemo(
-    () => makeFrame(centreline, { startAlong: along(layout.startAlong), reversed: layout.reversed }),
-    [centreline, layout],
+interface MapPanelProps {
+  page: CornerPageData
+  selected: string | null
+  closeTo: string
+  /** Opens the form of a new mark at this place. */
+  onAdd: (place: TypedPlace) => void
+  onSelect: (mark: string) => void
+}
+
+/** The map of the corner: a still picture from the server until the one to move, tap and drag on stands. */
+export function MapPanel({ page, selected, closeTo, onAdd, onSelect }: MapPanelProps) {
+  const { name } = page.cut.corner
+  const [ref, width] = useSheetWidth(page.sheet)
+  const frame = useFrame(page)
+  const edits = usePlaceEdits(page, frame)
+  const { scene, reading, projection } = useCornerDrawing(page, frame, { selected, pending: edits.pending, width })
+  const still = useMemo(
+    () => cornerMap(scene, reading, projection, cornerMapWords(name)),
+    [scene, reading, projection, name],
   )
-  return <div className="map-panel">{frame.length}</div>
+  return (
+    <>
+      <div className="map-panel" ref={ref}>
+        <LiveOverStill still={still} label={words.mapLabel(name)} description={words.mapDescription}>
+          {(onReady) => <LiveMap {...{ page, frame, edits, scene, reading, projection, onAdd, onSelect, onReady }} />}
+        </LiveOverStill>
+      </div>
+      {edits.result ? <Outcome result={edits.result} operation={page.ids.operation} closeTo={closeTo} /> : null}
+      {page.may.add ? <p className="map-hint">{words.mapHint}</p> : null}
+    </>
+  )
 }

@@ -4,7 +4,7 @@ import { Empty } from '~/components/ui/empty'
 import { MarkGlyph } from '~/draw/svg/glyph'
 import { type Metres, metres, type Seconds } from '~/track/units'
 import { acrossWords, corner as words } from '~/words/corner'
-import { gearChange, mannerWord, proofWord } from '~/words/kinds'
+import { downBy, mannerWord, proofWord } from '~/words/kinds'
 import { againstSimulator, formatKmhFigure, formatNumber } from '~/words/measures'
 import { glyphForm, glyphKind, markName, shownProof } from './mark-words'
 import type { CornerPageData, LineData } from './page-data'
@@ -102,7 +102,7 @@ function MarkRow({ page, line, mark, place, open, to }: MarkRowProps) {
       </td>
       <td className="against">
         {line.againstSim === null ? null : (
-          <>
+          <span>
             <MarkGlyph
               kind={glyphKind(mark)}
               form="sim"
@@ -111,7 +111,7 @@ function MarkRow({ page, line, mark, place, open, to }: MarkRowProps) {
               mirror={corner.direction === 'left'}
             />
             {againstSimulator(line.againstSim)}
-          </>
+          </span>
         )}
       </td>
       <td className="r next">{line.toNext ? <ToNext {...line.toNext} /> : null}</td>
@@ -131,8 +131,7 @@ export function ToDatum({ value }: { value: Metres }) {
 }
 
 function how(mark: MarkView) {
-  if (mark.kind === 'gear' && mark.gear !== null && mark.downshifts !== null)
-    return gearChange(mark.downshifts, mark.gear)
+  if (mark.kind === 'gear' && mark.downshifts !== null) return downBy(mark.downshifts)
   return mark.manner ? mannerWord(mark.manner) : ''
 }
 

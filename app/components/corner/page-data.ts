@@ -25,6 +25,8 @@ export interface CornerPageData {
   proposals: ProposalData[]
   /** Fresh ids for the page's forms: what is sent twice is done once. */
   ids: { operation: string; mark: string }
+  /** Width in px that the server draws the map for; the browser draws again for its own. */
+  sheet: number
 }
 
 /** A line of the table; its mark stands in the cut. */
@@ -86,7 +88,10 @@ export function proposalData(view: BookView, cut: CornerCut, waiting: readonly W
 }
 
 interface Sources
-  extends Pick<CornerPageData, 'team' | 'cut' | 'names' | 'ids' | 'show' | 'condition' | 'changes' | 'proposals'> {
+  extends Pick<
+    CornerPageData,
+    'team' | 'cut' | 'names' | 'ids' | 'sheet' | 'show' | 'condition' | 'changes' | 'proposals'
+  > {
   actor: PersonActor
   frame: LayoutFrame
 }

@@ -17,6 +17,8 @@ export interface PendingPlace {
   at: GivenPlace
 }
 
+export type PlaceEdits = ReturnType<typeof usePlaceEdits>
+
 /** Presses of an arrow key within this many milliseconds are one change. */
 const PAUSE = 500
 

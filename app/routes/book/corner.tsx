@@ -1,5 +1,5 @@
 import { parseWithZod } from '@conform-to/zod/v4'
-import { data } from 'react-router'
+import { data, type ShouldRevalidateFunctionArgs } from 'react-router'
 import { v7 } from 'uuid'
 import type { Actor } from '~/book/actions'
 import { type CornerCut, cornerOf } from '~/book/cuts'
@@ -11,6 +11,7 @@ import { type CornerIntent, cornerForm } from '~/components/corner/mark-forms'
 import { markIntent } from '~/components/corner/mark-intent'
 import { changeData, cornerPageData, proposalData } from '~/components/corner/page-data'
 import { type CornerResult, intentResult, plainResult } from '~/components/corner/result'
+import { opensOnly } from '~/components/frame/revalidation'
 import { applyOperation } from '~/db/apply.server'
 import type { Db } from '~/db/database'
 import { decideProposal, listProposals } from '~/db/proposals.server'
@@ -22,6 +23,7 @@ import { dbContext } from '~/middleware/context'
 import { layOutGeometry } from '~/middleware/lay-out-geometry.server'
 import { readForm } from '~/middleware/read-form.server'
 import { refusal } from '~/middleware/refusal.server'
+import { sheetWidth } from '~/middleware/sheet-width.server'
 import { teamContext } from '~/middleware/team.server'
 import { makeLapFrame } from '~/track/lap-frame'
 import { along } from '~/track/units'
@@ -35,7 +37,7 @@ export const meta: Route.MetaFunction = ({ loaderData }) => {
   return [{ title: pageTitle(`${corner.number} ${corner.name}`, book.name) }]
 }
 
-export async function loader({ context, params, url }: Route.LoaderArgs) {
+export async function loader({ request, context, params, url }: Route.LoaderArgs) {
   const view = context.get(bookContext)
   const cut = cornerOf(view, params.number)
   if (!cut) throw refusal('not-found')
@@ -61,6 +63,7 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
       show: url.searchParams.get('show'),
     }),
     ids: { operation: v7(), mark: v7() },
+    sheet: sheetWidth(request),
   })
 }
 
@@ -102,6 +105,10 @@ async function perform(
   const outcome = operation ? await applyOperation(db, actor, operation) : ({ kind: 'nothing', rev: 0 } as const)
   return intentResult(cut, intent, operation, outcome, sent)
 }
+
+/** Opening a form or a mark asks the server nothing. */
+export const shouldRevalidate = (args: ShouldRevalidateFunctionArgs) =>
+  !opensOnly(args, ['show', 'condition']) && args.defaultShouldRevalidate
 
 export default function Corner({ loaderData, actionData }: Route.ComponentProps) {
   return (

@@ -1,6 +1,7 @@
 import { href, Outlet } from 'react-router'
 import { BookFrame } from '~/components/frame/book-frame'
 import { ProblemPage } from '~/components/frame/problem-page'
+import { frameRevalidates } from '~/components/frame/revalidation'
 import { SignOutButton } from '~/components/frame/sign-out-button'
 import { book, bookContext } from '~/middleware/book.server'
 import { teamContext } from '~/middleware/team.server'
@@ -20,6 +21,8 @@ export function loader({ context }: Route.LoaderArgs) {
     tabs: view.corners.map((corner) => ({ number: corner.number, name: corner.name })),
   }
 }
+
+export const shouldRevalidate = frameRevalidates
 
 export default function BookLayout({ loaderData, params }: Route.ComponentProps) {
   return (
