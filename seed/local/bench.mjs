@@ -13,7 +13,7 @@ await main(async () => {
   await step('Database with the demo', async () => {
     databaseUrl = (await demo()).appUrl
   })
-  Object.assign(process.env, { DATABASE_URL: databaseUrl, LOG_LEVEL: 'warn' })
+  Object.assign(process.env, { NODE_ENV: 'production', DATABASE_URL: databaseUrl, LOG_LEVEL: 'warn' })
   const { runnerImport } = await import('vite')
   const { module } = await runnerImport('./tests/bench/all.ts', { resolve: { tsconfigPaths: true }, logLevel: 'error' })
   const met = await module.benchAll({ databaseUrl, email: 'mona@lanternside.example', password: demoPassword })
