@@ -61,12 +61,13 @@ export function columnsOf(fields: readonly string[]): Columns | undefined {
   }
   const [lon, lat, x, y] = [find(names.lon), find(names.lat), find(names.x), find(names.y)]
   const metric = lon === -1 || lat === -1
-  if (metric && (x === -1 || y === -1)) return undefined
+  const [first, second] = metric ? [x, y] : [lon, lat]
+  if (first === -1 || second === -1 || first === second) return undefined
   const [height, time, right, left] = [find(names.height), find(names.time), find(names.right), find(names.left)]
   const bothSides = right !== -1 && left !== -1
   return {
-    first: metric ? x : lon,
-    second: metric ? y : lat,
+    first,
+    second,
     metric,
     ...(height !== -1 && { height }),
     ...(time !== -1 && { time: { column: time, seconds: words[time]!.includes('ms') ? 0.001 : 1 } }),

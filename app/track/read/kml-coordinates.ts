@@ -61,16 +61,21 @@ export function readTuples(text: string, points: Points, where: string): Tuples 
 
 function take(fields: readonly string[], spaced: boolean, points: Points, place: () => string): Problem | undefined {
   if (fields.length < 2 || fields.length > 4 || (fields.length === 4 && spaced)) {
-    const says = `${quoted(fields.join(','))} is not a position. Write longitude,latitude or longitude,latitude,height, with points in the numbers.`
-    return problem('coordinates-broken', says, place())
+    return brokenTuple(fields, place())
   }
   const [lon, lat] = [decimal(fields[0]!), decimal(fields[1]!)]
   if (Number.isNaN(lon)) return numberProblem(fields[0]!, 'longitude', place())
   if (Number.isNaN(lat)) return numberProblem(fields[1]!, 'latitude', place())
+  if (!coordinateFits(lon, lat) && fields.length === 4) return brokenTuple(fields, place())
   if (!coordinateFits(lon, lat)) return coordinateProblem(lon, lat, place())
   const height = decimal(fields[2] ?? '')
   if (Number.isNaN(height) && fields[2] !== undefined && fields[2] !== '')
     return numberProblem(fields[2], 'height', place())
   points.push(lon, lat, height)
   return undefined
+}
+
+function brokenTuple(fields: readonly string[], place: string): Problem {
+  const says = `${quoted(fields.join(','))} is not a position. Write longitude,latitude or longitude,latitude,height, with points in the numbers.`
+  return problem('coordinates-broken', says, place)
 }

@@ -30,6 +30,7 @@ export class KmlReader implements XmlReader {
   private readonly path: string[] = []
   private name: string | undefined
   private said = ''
+  private saidFrom = ''
   private start = 0
   private segment = 0
   private where = ''
@@ -55,6 +56,7 @@ export class KmlReader implements XmlReader {
     if (skipped.has(name)) return 'skip'
     this.path.push(name)
     this.said = ''
+    if (name === 'coordinates') this.saidFrom = this.place.where()
     if (name === 'Placemark') this.name = undefined
     if (geometries.has(name)) this.begin()
     return undefined
@@ -89,7 +91,7 @@ export class KmlReader implements XmlReader {
   }
 
   private takeTuples(): void {
-    const found = readTuples(this.said, this.points, this.place.where())
+    const found = readTuples(this.said, this.points, this.saidFrom)
     if (found.problem) this.place.stop(found.problem)
     this.blanks ||= found.blanks
     this.extra += found.extra
