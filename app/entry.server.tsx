@@ -46,10 +46,12 @@ export default function handleRequest(
   const nonce = context.get(nonceContext)
   const whole = routerContext.isSpaMode || isbot(request.headers.get('user-agent'))
   return new Promise<Response>((resolve, reject) => {
-    let failed = false
     let begun = false
+    const failures: unknown[] = []
+    const report = (error: unknown) => handleError(error, { request, context, params: {} })
     const begin = () => {
       begun = true
+      failures.forEach(report)
       const body = new PassThrough({
         final(done) {
           clearTimeout(timer)
@@ -57,7 +59,9 @@ export default function handleRequest(
         },
       })
       body.once('close', () => clearTimeout(timer))
-      resolve(new Response(createReadableStreamFromReadable(body), { status: failed ? 500 : status, headers }))
+      resolve(
+        new Response(createReadableStreamFromReadable(body), { status: failures.length > 0 ? 500 : status, headers }),
+      )
       pipe(body)
     }
     const { pipe, abort } = renderToPipeableStream(
@@ -75,8 +79,9 @@ export default function handleRequest(
           reject(error)
         },
         onError(error: unknown) {
-          failed = true
-          if (begun) handleError(error, { request, context, params: {} })
+          // What keeps the document from beginning is rejected below and reported by the caller.
+          if (begun) report(error)
+          else failures.push(error)
         },
       },
     )
