@@ -9,7 +9,6 @@ export function CardNotes({ page }: { page: CornerPageData }) {
   const { card } = page.cut.corner
   const setsUp = page.cut.tabs.find((tab) => tab.id === card.setsUp)
   const texts: [string, string][] = [
-    ['Line', card.line],
     ['Surface', card.surface],
     ['Water', card.water],
     ['The car', card.car],
@@ -31,6 +30,7 @@ export function CardNotes({ page }: { page: CornerPageData }) {
             </dd>
           </>
         ) : null}
+        {card.line ? <Text term="Line" text={card.line} /> : null}
         {card.kerbs.length > 0 ? (
           <>
             <dt>Kerbs</dt>
@@ -43,14 +43,7 @@ export function CardNotes({ page }: { page: CornerPageData }) {
             </dd>
           </>
         ) : null}
-        {texts.map(([term, text]) =>
-          text ? (
-            <div key={term} className="contents">
-              <dt>{term}</dt>
-              <dd className={term === 'Water' ? 'water-words' : undefined}>{text}</dd>
-            </div>
-          ) : null,
-        )}
+        {texts.map(([term, text]) => (text ? <Text key={term} {...{ term, text }} /> : null))}
         {setsUp ? (
           <>
             <dt>Sets up</dt>
@@ -63,6 +56,15 @@ export function CardNotes({ page }: { page: CornerPageData }) {
         ) : null}
       </dl>
     </section>
+  )
+}
+
+function Text({ term, text }: { term: string; text: string }) {
+  return (
+    <>
+      <dt>{term}</dt>
+      <dd className={term === 'Water' ? 'water-words' : undefined}>{text}</dd>
+    </>
   )
 }
 

@@ -56,10 +56,12 @@ export function changeData(
   logged: readonly LoggedChange[],
 ): ChangeData[] {
   const makers = new Map<string, PersonId>(cut.corner.marks.map((mark) => [mark.id, mark.madeBy]))
-  const targets = new Map(logged.map((change) => [change.operation, change.target.id]))
+  const lines = new Map(logged.map((change) => [change.operation, change]))
   return tellChanges(logged, view).map((told) => {
-    const madeBy = makers.get(targets.get(told.operation) ?? '') ?? told.by
-    const mayUndo = may(actor, 'mark.change', { archived: view.book.archived, madeBy }).ok
+    const line = lines.get(told.operation)
+    const madeBy = makers.get(line?.target.id ?? '') ?? told.by
+    // What was made together is taken back together, and may reach beyond this corner: not from here.
+    const mayUndo = !line?.batch && may(actor, 'mark.change', { archived: view.book.archived, madeBy }).ok
     return { operation: told.operation, by: told.by, words: changeWords(told), mayUndo }
   })
 }
