@@ -15,6 +15,8 @@ const lengthOf = (reading: LayoutReading): number => {
   }, 0)
 }
 
+const firstMessage = (reading: LayoutReading) => (reading.ok ? '' : (reading.problems[0]?.message ?? ''))
+
 const codes = (reading: LayoutReading) => (reading.ok ? reading.warnings : reading.problems).map(({ code }) => code)
 
 describe('Every way in which the Sandbar Loop comes', () => {
@@ -78,7 +80,7 @@ describe('What a message says', () => {
   it('tells the gap of a line that does not close, and that it can be closed', () => {
     const reading = readLayout(lineString(oval(60).slice(0, 55), { open: true }), 'shore.geojson')
     expect(reading).toMatchObject({ ok: false, problems: [{ code: 'ring-open', remedy: 'close' }] })
-    const [{ message }] = (reading as Extract<LayoutReading, { ok: false }>).problems as [{ message: string }]
+    const message = firstMessage(reading)
     expect(message).toMatch(
       /^shore\.geojson: The centreline does not close\. The last point is \d{3}\u00A0m from the first\./,
     )
@@ -86,7 +88,7 @@ describe('What a message says', () => {
 
   it('shows a file’s name on one line and cut short', () => {
     const reading = readLayout(text(''), `${'long'.repeat(80)}\n\u202E.gpx`)
-    const [{ message }] = (reading as Extract<LayoutReading, { ok: false }>).problems as [{ message: string }]
+    const message = firstMessage(reading)
     expect(message.startsWith(`${'long'.repeat(30)}…: `)).toBe(true)
   })
 })

@@ -31,6 +31,9 @@ export interface Round {
   readonly end: number
   /** First position after the round, where the stretch goes on. */
   readonly next: number | undefined
+  /** Where the gate is crossed at the beginning and at the end: 17.25 is a quarter of the way from position 17 to 18. */
+  readonly from: number
+  readonly to: number
 }
 
 /** What the best gate gives. */
@@ -49,14 +52,14 @@ interface Pass {
 
 /**
  * Finds the laps of a trace: the place that it passes again and again, within 15 m and 30° of heading, and the rounds from
- * one pass to the next. Of all places tried the one wins at which most rounds are alike in length, then the one where the
- * passes lie closest. Nothing is bridged between stretches.
+ * one pass to the next. Of all places tried the one wins at which most rounds are alike in length, then the one passed most
+ * often, then the one where the passes lie closest. Nothing is bridged between stretches.
  */
 export function findRounds(flat: Flat, stretches: readonly Line[]): Rounds {
   const steps = takeSteps(flat, stretches)
   const pieces = indexOf(flat, steps)
   if (!pieces) return { rounds: [], interrupted: 0 }
-  let best: { passes: Pass[]; gate: number; score: number; spread: number } | undefined
+  let best: Gate | undefined
   for (const gate of gatesOf(steps)) {
     const passes = passesAt(flat, steps, pieces, gate)
     const lengths = roundLengths(passes)
@@ -65,11 +68,24 @@ export function findRounds(flat: Flat, stretches: readonly Line[]): Rounds {
     const near = lengths.filter((length) => Math.abs(length - median) <= alike * median).length
     const score = 2 * near - lengths.length
     const spread = passes.reduce((sum, pass) => sum + pass.distance, 0) / (passes.length - 1)
-    if (!best || score > best.score || (score === best.score && spread < best.spread - 1e-6)) {
-      best = { passes, gate, score, spread }
-    }
+    const found = { passes, gate, score, spread }
+    if (!best || isBetter(found, best)) best = found
   }
   return best ? cut(flat, steps, stretches, best.passes, best.gate) : { rounds: [], interrupted: 0 }
+}
+
+interface Gate {
+  readonly passes: readonly Pass[]
+  readonly gate: number
+  /** Rounds alike in length less the others, and metres between the passes. */
+  readonly score: number
+  readonly spread: number
+}
+
+function isBetter(a: Gate, b: Gate): boolean {
+  if (a.score !== b.score) return a.score > b.score
+  if (a.passes.length !== b.passes.length) return a.passes.length > b.passes.length
+  return a.spread < b.spread - 1e-6
 }
 
 function takeSteps(flat: Flat, stretches: readonly Line[]): Steps {
@@ -175,9 +191,14 @@ function cut(flat: Flat, steps: Steps, stretches: readonly Line[], passes: reado
   const { x, y } = flat
   const [px, py] = [x[at[gate]!]!, y[at[gate]!]!]
   const [gx, gy] = [x[at[gate + 1]!]! - px, y[at[gate + 1]!]! - py]
+  const ahead = (i: number) => (x[i]! - px) * gx + (y[i]! - py) * gy
   const crossing = ({ step }: Pass) => {
-    for (let i = at[step]!; i <= at[step + 1]!; i++) if ((x[i]! - px) * gx + (y[i]! - py) * gy >= 0) return i
-    return at[step + 1]! + 1
+    for (let i = at[step]!; i <= at[step + 1]!; i++) {
+      if (ahead(i) < 0) continue
+      const before = i > at[step]! ? ahead(i - 1) : 0
+      return { first: i, place: before < 0 ? i - 1 + before / (before - ahead(i)) : i }
+    }
+    return { first: at[step + 1]! + 1, place: at[step + 1]! }
   }
   const rounds: Round[] = []
   let interrupted = 0
@@ -186,12 +207,12 @@ function cut(flat: Flat, steps: Steps, stretches: readonly Line[], passes: reado
       interrupted++
       continue
     }
-    const start = crossing(passes[k - 1]!)
-    const next = crossing(passes[k]!)
+    const { first: start, place: from } = crossing(passes[k - 1]!)
+    const { first: next, place: to } = crossing(passes[k]!)
     let end = next
     while (end - 1 > start && gapBetween(flat, start, end - 1) < 1) end--
     if (end - start < 2) continue
-    rounds.push({ start, end, next: next < stretches[passes[k]!.stretch]!.end ? next : undefined })
+    rounds.push({ start, end, next: next < stretches[passes[k]!.stretch]!.end ? next : undefined, from, to })
   }
   return { rounds, interrupted }
 }

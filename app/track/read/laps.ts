@@ -54,7 +54,7 @@ export function chooseLap(content: Content, wanted?: number): Choice | Problem |
   const { rounds, interrupted } = findRounds(flat, lines)
   const closed = lines.filter(({ start, end }) => isClosed(flat, start, end))
   const found = isWhole(rounds, closed, lines, flat) ? [] : rounds
-  const whole = closed.map(({ start, end }) => ({ start, end, next: undefined }))
+  const whole = closed.map(({ start, end }) => ({ start, end, next: undefined, from: start, to: end - 1 }))
   const laps = (found.length > 0 ? found : whole).map((round, i) => measure(points, flat, round, i + 1))
   if (laps.length > 0) {
     const warnings = interrupted > 0 && found.length > 0 ? [leftOutLaps(interrupted)] : []
@@ -83,7 +83,7 @@ function isWhole(rounds: readonly Round[], closed: readonly Line[], lines: reado
 
 function measure(points: Points, flat: Flat, round: Round, index: number): Found {
   const { time } = points
-  const { start, end, next } = round
+  const { start, end, next, from, to } = round
   const last = next ?? end - 1
   let gap = 0
   let jumps = false
@@ -95,7 +95,7 @@ function measure(points: Points, flat: Flat, round: Round, index: number): Found
     jumps ||= gapBetween(flat, before, i) > fastest * Math.max(1, pause)
     before = i
   }
-  const took = time[last]! - time[start]!
+  const took = timeAt(time, to) - timeAt(time, from)
   const lengthMetres = metres(lengthAlong(flat, start, end) + gapBetween(flat, end - 1, start))
   const timed = Number.isFinite(took) && took > 0
   return {
@@ -105,6 +105,12 @@ function measure(points: Points, flat: Flat, round: Round, index: number): Found
     round,
     jumps,
   }
+}
+
+/** Time at a place between two positions. */
+function timeAt(time: Float64Array, place: number): number {
+  const before = time[Math.floor(place)]!
+  return before + (place % 1) * ((time[Math.ceil(place)] ?? before) - before)
 }
 
 const thousandths = (value: number) => Math.round(value * 1000) / 1000
