@@ -1,26 +1,41 @@
 /** What the log keeps of an error. */
-export type ErrorEntry = { error: string; code?: string; constraint?: string; message?: string; stack?: string }
+export type ErrorEntry = {
+  error: string
+  message?: string
+  code?: string
+  constraint?: string
+  stack?: string
+}
 
 const text = (value: unknown) => (typeof value === 'string' ? value : undefined)
 
+/** Where an error came from: its stack without its message, which stands at the head of it. */
+function framesOf({ stack = '', message }: Error): string {
+  const after = stack.indexOf(message) + message.length
+  return stack
+    .slice(after)
+    .split('\n')
+    .filter((line) => /^\s+at /.test(line))
+    .join('\n')
+}
+
+/** The errors that led to an error, itself first. */
+function chainOf(error: Error): Error[] {
+  const chain: Error[] = []
+  for (let at: unknown = error; at instanceof Error && !chain.includes(at); at = at.cause) chain.push(at)
+  return chain
+}
+
 /**
- * What may be logged of an error: its name, its stack, and its message. Of a database error only the code and the
- * constraint, since its messages repeat the values of the statement.
+ * What may be logged of an error: its name, its message, where it came from. Of an error of the database, or of a statement
+ * that did not reach it, only the code and the constraint: its messages repeat the values of the statement.
  */
 export function errorEntry(error: unknown): ErrorEntry {
   if (!(error instanceof Error)) return { error: typeof error }
-  const frames = error.stack?.split('\n').filter((line) => /^\s+at /.test(line))
-  const stack = frames?.join('\n')
-  const database = databaseError(error)
-  if (database) return { error: database.name, ...database.facts, stack }
-  return { error: error.name, message: error.message, stack }
-}
-
-function databaseError(error: Error) {
-  for (let at: unknown = error; at instanceof Error; at = at.cause) {
-    const { code, severity, constraint } = at as Error & Record<'code' | 'severity' | 'constraint', unknown>
-    if (text(severity)) return { name: 'DatabaseError', facts: { code: text(code), constraint: text(constraint) } }
-    if ('query' in at && !(at.cause instanceof Error)) return { name: 'DatabaseError', facts: {} }
-  }
-  return undefined
+  const stack = framesOf(error)
+  const chain = chainOf(error)
+  const ofStatement = chain.some((link) => 'severity' in link || ('query' in link && 'params' in link))
+  if (!ofStatement) return { error: error.name, message: error.message, stack }
+  const facts = chain.at(-1) as Error & { code?: unknown; constraint?: unknown }
+  return { error: 'DatabaseError', code: text(facts.code), constraint: text(facts.constraint), stack }
 }
