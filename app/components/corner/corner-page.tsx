@@ -1,5 +1,5 @@
 import type { SubmissionResult } from '@conform-to/react'
-import { Suspense } from 'react'
+import { Suspense, useCallback, useState } from 'react'
 import { Link, useNavigate, useSearchParams } from 'react-router'
 import { GROUNDS, type Ground } from '~/book/kinds'
 import { Icon } from '~/components/ui/icon'
@@ -26,6 +26,7 @@ interface CornerPageProps {
 export function CornerPage({ page, result, lastResult }: CornerPageProps) {
   const { open, linkWith } = useOpenForm()
   const corner = page.cut.corner
+  const [latest, setFromMap] = useLatest(result)
   const closeTo = linkWith({ add: null, mark: null })
   const navigate = useNavigate()
   const go = (to: string) => navigate(to, { preventScrollReset: true, replace: true })
@@ -35,9 +36,9 @@ export function CornerPage({ page, result, lastResult }: CornerPageProps) {
     <main className="corner-page">
       <div className="corner-main">
         <CornerHead page={page} linkWith={linkWith} />
-        {result ? <Outcome {...{ result, closeTo }} operation={page.ids.operation} /> : null}
+        {latest ? <Outcome {...{ closeTo }} result={latest} operation={page.ids.operation} /> : null}
         <Suspense fallback={<div className="map-panel waiting" />}>
-          <MapPanel {...{ page, closeTo }} selected={open.mark} onAdd={onAdd} onSelect={onSelect} />
+          <MapPanel {...{ page }} selected={open.mark} onAdd={onAdd} onSelect={onSelect} onResult={setFromMap} />
         </Suspense>
         <OpenForm {...{ page, open, closeTo, lastResult }} />
         {page.lines.length > 0 ? (
@@ -57,6 +58,14 @@ export function CornerPage({ page, result, lastResult }: CornerPageProps) {
       </aside>
     </main>
   )
+}
+
+/** The outcome of what was sent last, by a form or from the map. */
+function useLatest(result: CornerResult | null) {
+  const [shown, setShown] = useState({ result, fromMap: null as CornerResult | null })
+  if (shown.result !== result) setShown({ result, fromMap: null })
+  const setFromMap = useCallback((fromMap: CornerResult) => setShown((before) => ({ ...before, fromMap })), [])
+  return [shown.fromMap ?? result, setFromMap] as const
 }
 
 export type LinkWith = (change: Record<string, string | null>) => string

@@ -4,8 +4,8 @@ import { LiveOverStill } from '~/components/map/live-over-still'
 import { cornerMap } from '~/draw/corner-map'
 import { cornerMapWords, corner as words } from '~/words/corner'
 import { LiveMap } from './live-map'
-import { Outcome } from './outcome'
 import type { CornerPageData } from './page-data'
+import type { CornerResult } from './result'
 import type { TypedPlace } from './typed-place'
 import { useCornerDrawing, useFrame } from './use-corner-drawing'
 import { usePlaceEdits } from './use-place-edits'
@@ -13,18 +13,19 @@ import { usePlaceEdits } from './use-place-edits'
 interface MapPanelProps {
   page: CornerPageData
   selected: string | null
-  closeTo: string
   /** Opens the form of a new mark at this place. */
   onAdd: (place: TypedPlace) => void
   onSelect: (mark: string) => void
+  /** What became of a mark that was moved on the map. */
+  onResult: (result: CornerResult) => void
 }
 
 /** The map of the corner: a still picture from the server until the one to move, tap and drag on stands. */
-export function MapPanel({ page, selected, closeTo, onAdd, onSelect }: MapPanelProps) {
+export function MapPanel({ page, selected, onAdd, onSelect, onResult }: MapPanelProps) {
   const { name } = page.cut.corner
   const [ref, width] = useSheetWidth(page.sheet)
   const frame = useFrame(page)
-  const edits = usePlaceEdits(page, frame)
+  const edits = usePlaceEdits(page, frame, onResult)
   const { scene, reading, projection } = useCornerDrawing(page, frame, { selected, pending: edits.pending, width })
   const still = useMemo(
     () => cornerMap(scene, reading, projection, cornerMapWords(name)),
@@ -32,12 +33,11 @@ export function MapPanel({ page, selected, closeTo, onAdd, onSelect }: MapPanelP
   )
   return (
     <>
-      <div className="map-panel" ref={ref}>
+      <div className="map-panel" ref={ref} onBlur={edits.rest}>
         <LiveOverStill still={still} label={words.mapLabel(name)} description={words.mapDescription}>
           {(onReady) => <LiveMap {...{ page, frame, edits, scene, reading, projection, onAdd, onSelect, onReady }} />}
         </LiveOverStill>
       </div>
-      {edits.result ? <Outcome result={edits.result} operation={page.ids.operation} closeTo={closeTo} /> : null}
       {page.may.add ? <p className="map-hint">{words.mapHint}</p> : null}
     </>
   )

@@ -26,11 +26,12 @@ const PAUSE = 500
  * Moves of marks on the map: shown at once, sent when the hand rests, one after the other, so that each starts from what the
  * server has. What fails comes back as a result; the mark then stands where the book has it.
  */
-export function usePlaceEdits(page: CornerPageData, frame: LayoutFrame) {
+export function usePlaceEdits(page: CornerPageData, frame: LayoutFrame, onResult: (result: CornerResult) => void) {
   const fetcher = useFetcher<{ result: CornerResult | null }>()
   const [pending, setPending] = useState<PendingPlace | null>(null)
   const [rested, setRested] = useState(false)
   const sent = useRef<PendingPlace | null>(null)
+  const underWay = useRef(false)
   const idle = fetcher.state === 'idle'
 
   useEffect(() => {
@@ -40,21 +41,36 @@ export function usePlaceEdits(page: CornerPageData, frame: LayoutFrame) {
   }, [pending, rested])
 
   useEffect(() => {
-    if (!idle) return
-    if (sent.current) {
-      if (sent.current === pending) setPending(null)
-      sent.current = null
+    if (!idle) {
+      underWay.current = true
       return
+    }
+    if (sent.current) {
+      if (!underWay.current) return
+      underWay.current = false
+      const answered = sent.current === pending
+      sent.current = null
+      if (answered) {
+        setPending(null)
+        return
+      }
     }
     const mark = page.cut.corner.marks.find((one) => one.id === pending?.mark)
     if (!pending || !rested || !mark) return
     sent.current = pending
+    underWay.current = false
     fetcher.submit(changeFields(page, frame, mark, pending), { method: 'post' })
   }, [idle, pending, rested, page, frame, fetcher])
 
+  const result = idle ? fetcher.data?.result : null
+  useEffect(() => {
+    if (result) onResult(result)
+  }, [result, onResult])
+
   return {
     pending,
-    result: idle ? (fetcher.data?.result ?? null) : null,
+    /** The hand has left the map: what is pending is sent. */
+    rest: () => setRested(true),
     /** `now`: the hand has let go; otherwise more may follow. */
     move: (place: PendingPlace, now: boolean) => {
       setPending(place)
