@@ -33,7 +33,7 @@ export function MapPanel({ page, selected, onAdd, onSelect, onResult }: MapPanel
   )
   return (
     <>
-      <div className="map-panel" ref={ref} onBlur={edits.rest}>
+      <div className="map-panel" ref={ref}>
         <LiveOverStill still={still} label={words.mapLabel(name)} description={words.mapDescription}>
           {(onReady) => <LiveMap {...{ page, frame, edits, scene, reading, projection, onAdd, onSelect, onReady }} />}
         </LiveOverStill>

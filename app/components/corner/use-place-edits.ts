@@ -36,8 +36,13 @@ export function usePlaceEdits(page: CornerPageData, frame: LayoutFrame, onResult
 
   useEffect(() => {
     if (!pending || rested) return
-    const timer = setTimeout(() => setRested(true), PAUSE)
-    return () => clearTimeout(timer)
+    const rest = () => setRested(true)
+    const timer = setTimeout(rest, PAUSE)
+    document.addEventListener('focusout', rest)
+    return () => {
+      clearTimeout(timer)
+      document.removeEventListener('focusout', rest)
+    }
   }, [pending, rested])
 
   useEffect(() => {
@@ -69,8 +74,6 @@ export function usePlaceEdits(page: CornerPageData, frame: LayoutFrame, onResult
 
   return {
     pending,
-    /** The hand has left the map: what is pending is sent. */
-    rest: () => setRested(true),
     /** `now`: the hand has let go; otherwise more may follow. */
     move: (place: PendingPlace, now: boolean) => {
       setPending(place)
