@@ -4,6 +4,7 @@ import { operationSchema } from '~/book/schemas'
 import { applyOne, finish, type Manner, Stopped, type Work } from './apply/engine'
 import { newId } from './apply/new-id'
 import { lockScopes } from './apply/scopes'
+import { isSensibleInstant } from './checks'
 import type { Db } from './database'
 import { personOf } from './own-team'
 import { isStorable } from './storable'
@@ -111,7 +112,10 @@ function readOperation(input: unknown): Operation | Outcome {
   if (typeof version === 'number' && version > OPERATION_VERSION) return { kind: 'refused', reason: 'newer-version' }
   if (!isStorable(input)) return { kind: 'invalid', problems: [{ field: '', code: 'not-storable' }] }
   const parsed = operationSchema.safeParse(input)
-  if (parsed.success) return parsed.data as Operation
+  if (parsed.success) {
+    if (isSensibleInstant(parsed.data.madeAt)) return parsed.data as Operation
+    return { kind: 'invalid', problems: [{ field: 'madeAt', code: 'out-of-range' }] }
+  }
   const problems = parsed.error.issues.map(({ path, code }) => ({ field: path.join('.'), code }))
   return { kind: 'invalid', problems }
 }

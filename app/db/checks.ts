@@ -17,6 +17,18 @@ export function nameProblems(field: string, name: string): Problem[] {
   return isStorable(name) ? [] : [{ field, code: 'invalid' }]
 }
 
+/** Metres: a road narrower or wider than this is a slip of the pen. */
+export const ROAD_WIDTH = [3, 60] as const
+
+const FIRST_INSTANT = Date.parse('2000-01-01T00:00:00Z')
+const LAST_INSTANT = Date.parse('2100-01-01T00:00:00Z')
+
+/** Whether an instant is one that a clock may show; a device that lost its time still counts from 1970 and is told so. */
+export const isSensibleInstant = (text: string): boolean => {
+  const at = Date.parse(text)
+  return at >= FIRST_INSTANT && at < LAST_INSTANT
+}
+
 /** What is wrong with a number that must lie between two others, both included. */
 export const rangeProblems = (field: string, value: number, least: number, most: number): Problem[] =>
   value >= least && value <= most ? [] : [{ field, code: 'out-of-range' }]

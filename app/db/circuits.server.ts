@@ -11,7 +11,7 @@ import type { Position } from '~/track/units'
 import { newId } from './apply/new-id'
 import { applyAll } from './apply.server'
 import { canonicalJson, sha256 } from './canonical'
-import { nameProblems, type Problem, rangeProblems, zoneProblems } from './checks'
+import { nameProblems, type Problem, ROAD_WIDTH, rangeProblems, zoneProblems } from './checks'
 import { commander, type Declined, lockTeam, type Member } from './command'
 import type { Db } from './database'
 import { centrelines, circuits, grounds, layouts } from './schema'
@@ -51,9 +51,8 @@ class Undone extends Error {
   }
 }
 
-/** A file of fewer positions is no circuit; a road narrower or wider than this is a slip of the pen. */
+/** A line of fewer positions is no circuit. */
 const LEAST_POSITIONS = 8
-const ROAD_WIDTH = [3, 60] as const
 
 function problemsOf({ circuit, layout, positions, ground }: NewCircuit): Problem[] {
   const isLine = positions.length >= LEAST_POSITIONS && isStorable(positions)

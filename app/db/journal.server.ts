@@ -6,6 +6,7 @@ import type { BookId, ConditionId, FindingId, MarkId, PersonId, TeamId } from '~
 import { may } from '~/book/may'
 import { wrap } from '~/track/lap-frame'
 import { sameJson } from './canonical'
+import { isSensibleInstant } from './checks'
 import { commander, type Declined, type Member } from './command'
 import type { Db } from './database'
 import { ownTeam } from './own-team'
@@ -32,8 +33,8 @@ export async function addFindings(db: Db, actor: Actor, inputs: readonly unknown
     return invalid(parsed.error.issues.map(({ path, code }) => ({ field: path.join('.'), code: code ?? 'invalid' })))
   const entries = parsed.data
   const latest = Date.now() + CLOCK_SLACK_MS
-  const early = entries.findIndex(({ foundAt }) => Date.parse(foundAt) > latest)
-  if (early >= 0) return invalid([{ field: `${early}.foundAt`, code: 'in-the-future' }])
+  const wrong = entries.findIndex(({ foundAt }) => !isSensibleInstant(foundAt) || Date.parse(foundAt) > latest)
+  if (wrong >= 0) return invalid([{ field: `${wrong}.foundAt`, code: 'out-of-range' }])
   try {
     return await db.transaction(async (tx) => {
       const asked = await commander(tx, actor, 'finding.add')

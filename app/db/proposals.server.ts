@@ -47,6 +47,7 @@ export async function decideProposal(
 ): Promise<Outcome> {
   const answer = may(actor, 'proposal.decide')
   if (!answer.ok) return { kind: 'refused', reason: answer.reason }
+  if (actor.kind !== 'person') return { kind: 'refused', reason: 'role' }
   return db.transaction(async (tx) => {
     const proposals = await lockProposals(tx, actor, id)
     const first = proposals[0]

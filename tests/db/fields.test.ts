@@ -169,6 +169,20 @@ describe('corners', () => {
   })
 })
 
+describe('measures', () => {
+  test('a road has a width, a corner a radius', async () => {
+    const width = operation(book.layoutScope, 'layout', book.layout, { roadWidth: [11, -2] })
+    expect(await problemsOf(width)).toEqual([{ field: 'roadWidth', code: 'out-of-range' }])
+    const radius = operation(book.layoutScope, 'corner', book.corners[0]!.id, { leastRadius: [42, 0] })
+    expect(await problemsOf(radius)).toEqual([{ field: 'leastRadius', code: 'out-of-range' }])
+  })
+
+  test('a change is made at a time that a clock may show', async () => {
+    const sent = { ...addsMark(book, newMark()), madeAt: '0000-01-01T00:00:00Z' }
+    expect(await problemsOf(sent)).toEqual([{ field: 'madeAt', code: 'out-of-range' }])
+  })
+})
+
 describe('conditions', () => {
   test('one with marks stays, and dry always', async () => {
     expectKind(await apply(addsMark(book, newMark(), { conditionId: book.wet })), 'applied')
@@ -176,6 +190,16 @@ describe('conditions', () => {
       const dropped = operation(book.scope, 'condition', id, { state: ['live', 'dropped'] })
       expect(await problemsOf(dropped)).toEqual([{ field: 'state', code: 'in-use' }])
     }
+  })
+
+  test('there is one dry', async () => {
+    const second = operation(book.scope, 'condition', newId(), {
+      state: [null, 'live'],
+      kind: [null, 'dry'],
+      name: [null, 'Drier'],
+      rank: [null, 'b'],
+    })
+    expect(await problemsOf(second)).toEqual([{ field: 'kind', code: 'taken' }])
   })
 
   test('an unused one goes and comes back', async () => {

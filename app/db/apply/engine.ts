@@ -17,7 +17,7 @@ import { mayApply } from './permission'
 import { addChange, addReceipt, bodyHash, findReceipts } from './receipts'
 import { leavingProblems, numberTaken, referenceProblems } from './references'
 import { keyOf, type LockedScope } from './scopes'
-import { change, load, make, type Stored } from './targets'
+import { change, hasMaker, load, make, type Stored } from './targets'
 import { compare, normalNow, normalSet, type Problem, resultProblems, type Values, valuesTo } from './values'
 
 /** One transaction under way: its scopes are locked, and everything it writes stands or falls together. */
@@ -129,7 +129,10 @@ async function problemsOf(
   const reach = { db: work.db, team: work.team, scope }
   const plain = resultProblems(kind, stored === null, now, after)
   if (plain.length > 0) return plain
-  if (stored === null && manner.by === null && kind === 'mark') return [{ field: 'state', code: 'needs-a-person' }]
+  if (stored === null && manner.by === null && hasMaker(kind)) return [{ field: 'state', code: 'needs-a-person' }]
+  // A book has one dry condition from its first day: all others differ from it.
+  if (stored === null && manner.asked && kind === 'condition' && after.kind === 'dry')
+    return [{ field: 'kind', code: 'taken' }]
   const unfound = await referenceProblems(reach, kind, now, after)
   return unfound.length > 0 ? unfound : leavingProblems(reach, kind, id, now, after)
 }

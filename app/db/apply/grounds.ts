@@ -10,7 +10,8 @@ import { landmarkPlacements, places, stretchPlacements, ties } from '../schema'
 /** The fields `sim` and `real` of a kind: rows of their own, each replaced whole. */
 export interface GroundStore {
   read(db: Db, team: TeamId, id: string): Promise<Partial<Record<Ground, Json>>>
-  write(db: Db, team: TeamId, id: string, ground: Ground, value: Json): Promise<void>
+  add(db: Db, team: TeamId, id: string, ground: Ground, value: Json): Promise<void>
+  remove(db: Db, team: TeamId, id: string, ground: Ground): Promise<void>
 }
 
 /** A place or a placement is plain data. */
@@ -28,10 +29,13 @@ export const markGrounds: GroundStore = {
       .where(and(eq(places.teamId, team), eq(places.markId, id as MarkId)))
     return Object.fromEntries(rows.map((row) => [row.ground, asJson(placeFrom(row))]))
   },
-  async write(db, team, id, ground, value) {
+  async remove(db, team, id, ground) {
+    await db
+      .delete(places)
+      .where(and(eq(places.teamId, team), eq(places.markId, id as MarkId), eq(places.ground, ground)))
+  },
+  async add(db, team, id, ground, value) {
     const markId = id as MarkId
-    await db.delete(places).where(and(eq(places.teamId, team), eq(places.markId, markId), eq(places.ground, ground)))
-    if (value === null) return
     const { along, across, tie } = value as unknown as Place
     await db.insert(places).values({ teamId: team, markId, ground, along, across })
     if (tie) await db.insert(ties).values({ teamId: team, markId, ground, ...tieColumns(tie) })
@@ -46,14 +50,15 @@ export const landmarkGrounds: GroundStore = {
       .where(and(eq(landmarkPlacements.teamId, team), eq(landmarkPlacements.landmarkId, id as LandmarkId)))
     return Object.fromEntries(rows.map((row) => [row.ground, asJson(placementFrom(row))]))
   },
-  async write(db, team, id, ground, value) {
+  async remove(db, team, id, ground) {
     const table = landmarkPlacements
-    const landmarkId = id as LandmarkId
     await db
       .delete(table)
-      .where(and(eq(table.teamId, team), eq(table.landmarkId, landmarkId), eq(table.ground, ground)))
-    if (value === null) return
-    await db.insert(table).values({ teamId: team, landmarkId, ground, ...(value as unknown as Placement) })
+      .where(and(eq(table.teamId, team), eq(table.landmarkId, id as LandmarkId), eq(table.ground, ground)))
+  },
+  async add(db, team, id, ground, value) {
+    const landmarkId = id as LandmarkId
+    await db.insert(landmarkPlacements).values({ teamId: team, landmarkId, ground, ...(value as unknown as Placement) })
   },
 }
 
@@ -65,11 +70,14 @@ export const stretchGrounds: GroundStore = {
       .where(and(eq(stretchPlacements.teamId, team), eq(stretchPlacements.stretchId, id as StretchId)))
     return Object.fromEntries(rows.map((row) => [row.ground, asJson(placementFrom(row))]))
   },
-  async write(db, team, id, ground, value) {
+  async remove(db, team, id, ground) {
     const table = stretchPlacements
+    await db
+      .delete(table)
+      .where(and(eq(table.teamId, team), eq(table.stretchId, id as StretchId), eq(table.ground, ground)))
+  },
+  async add(db, team, id, ground, value) {
     const stretchId = id as StretchId
-    await db.delete(table).where(and(eq(table.teamId, team), eq(table.stretchId, stretchId), eq(table.ground, ground)))
-    if (value === null) return
-    await db.insert(table).values({ teamId: team, stretchId, ground, ...(value as unknown as Placement) })
+    await db.insert(stretchPlacements).values({ teamId: team, stretchId, ground, ...(value as unknown as Placement) })
   },
 }

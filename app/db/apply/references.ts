@@ -72,7 +72,7 @@ const member: Check = async ({ db, team }, id) =>
       .where(and(eq(memberships.teamId, team), eq(memberships.personId, id as PersonId), isNull(memberships.endedAt))),
   )
 
-/** The landmark stays as it is until the transaction ends: it cannot be dropped while something is being tied to it. */
+/** Dropping a landmark locks the books of its layout too: it cannot go while something is being tied to it. */
 const tiedLandmark: Check = async ({ db, team, scope }, value) => {
   const id = (value as unknown as Place).tie?.landmarkId
   if (!id) return true
@@ -87,8 +87,7 @@ const tiedLandmark: Check = async ({ db, team, scope }, value) => {
           eq(landmarks.id, id as LandmarkId),
           eq(landmarks.state, 'live'),
         ),
-      )
-      .for('share'),
+      ),
   )
 }
 

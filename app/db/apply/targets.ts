@@ -27,6 +27,9 @@ const STORAGE: Record<TargetKind, Storage> = {
   stretch: { table: stretches, scope: 'layoutId', hasMaker: true, grounds: stretchGrounds },
 }
 
+/** Whether a thing of this kind keeps who made it. */
+export const hasMaker = (kind: TargetKind): boolean => STORAGE[kind].hasMaker
+
 /** A thing as it is stored. */
 export interface Stored {
   /** The book or layout it is in. */
@@ -78,11 +81,11 @@ function toColumns(kind: TargetKind, values: Values): Values {
   return { ...columns, datumAlong: along, datumWords: words }
 }
 
-async function writeGrounds(db: Db, team: TeamId, kind: TargetKind, id: string, values: Values) {
+async function addGrounds(db: Db, team: TeamId, kind: TargetKind, id: string, values: Values) {
   const { grounds } = STORAGE[kind]
-  if (!grounds) return
   for (const ground of groundFields) {
-    if (ground in values) await grounds.write(db, team, id, ground, values[ground] as Json)
+    const value: Json = values[ground] ?? null
+    if (value !== null) await grounds?.add(db, team, id, ground, value)
   }
 }
 
@@ -99,12 +102,12 @@ export async function make(
   const { table, scope, hasMaker } = STORAGE[kind]
   const own = { teamId: team, id, [scope]: scopeId, ...(hasMaker ? { madeBy } : {}) }
   await db.insert(table).values({ ...toColumns(kind, values), ...own })
-  await writeGrounds(db, team, kind, id, values)
+  await addGrounds(db, team, kind, id, values)
 }
 
 /** Writes some fields of a thing. */
 export async function change(db: Db, team: TeamId, kind: TargetKind, id: string, values: Values): Promise<void> {
-  const { table } = STORAGE[kind]
+  const { table, grounds } = STORAGE[kind]
   const columns = columnsOf(table)
   const own = toColumns(kind, values)
   if (Object.keys(own).length > 0) {
@@ -113,5 +116,6 @@ export async function change(db: Db, team: TeamId, kind: TargetKind, id: string,
       .set(own)
       .where(and(eq(columns.teamId!, team), eq(columns.id!, id)))
   }
-  await writeGrounds(db, team, kind, id, values)
+  for (const ground of groundFields) if (ground in values) await grounds?.remove(db, team, id, ground)
+  await addGrounds(db, team, kind, id, values)
 }

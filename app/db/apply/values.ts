@@ -3,6 +3,7 @@ import type { FieldChange, Json, TargetKind } from '~/book/operation'
 import { FIELDS, FIXED_FIELDS, REQUIRED_FIELDS } from '~/book/schemas'
 import { wrap } from '~/track/lap-frame'
 import { sameJson } from '../canonical'
+import { ROAD_WIDTH, rangeProblems } from '../checks'
 
 /** Values of a target's fields, in their normal form: what is compared and written. */
 export type Values = Record<string, Json>
@@ -144,6 +145,9 @@ function togetherProblems(kind: TargetKind, after: Values): Problem[] {
   }
   if (kind === 'corner' && (after.state === 'merged') !== (after.mergedInto !== null))
     problems.push({ field: 'mergedInto', code: 'merged-only' })
+  if (kind === 'corner' && !(Number(after.leastRadius) > 0))
+    problems.push({ field: 'leastRadius', code: 'out-of-range' })
+  if (kind === 'layout') problems.push(...rangeProblems('roadWidth', Number(after.roadWidth), ...ROAD_WIDTH))
   return problems
 }
 
