@@ -33,8 +33,16 @@ async function finish(code) {
   process.exit(result)
 }
 
+/** Ends this command when npm, which started it, was killed and could not pass that on. */
+function endWithNpm() {
+  if (!process.env.npm_lifecycle_event) return
+  const npm = process.ppid
+  setInterval(() => process.ppid !== npm && end(1), 500).unref()
+}
+
 /** Runs a command: signals and failures end it in order. */
 export async function main(work) {
+  endWithNpm()
   let signals = 0
   const signalled = (code) => () => {
     signals += 1
