@@ -1,8 +1,8 @@
 import type { LandmarkKind, TurnDirection } from '~/book/kinds'
 import type { GroundChoice, LandmarkView } from '~/book/view'
 import { builtShapes } from '~/draw/built-shapes'
-import { type DisplayList, linePath, type Point, path, polyline, type Shape, text } from '~/draw/display-list'
-import { needle, smallScaleBar } from '~/draw/furniture'
+import { type Box, type DisplayList, linePath, type Point, path, polyline, type Shape, text } from '~/draw/display-list'
+import { mapFurniture } from '~/draw/furniture'
 import { type GroundFeature, type Water, watersOf } from '~/draw/ground'
 import { markLabels } from '~/draw/map-labels'
 import { type MapMark, markShapes, type PlacedMark, placedMarks, tetherShapes } from '~/draw/map-marks'
@@ -159,12 +159,16 @@ function aimShapes(
   })
 }
 
-/** Labels of marks, then names of things, in the room that glyphs, road and furniture leave. */
+/**
+ * Labels of marks, then names of things, in the room that glyphs, road and furniture leave.
+ * @param within where labels may lie, px of the picture: all of it, or the part of it that is looked at
+ */
 export function cornerLabels(
   scene: CornerScene,
   reading: CornerReading,
   projection: Projection,
-  taken: Room['boxes'],
+  taken: readonly Box[],
+  within: Box = sheetBox(projection, -4),
 ): Shape[] {
   const { road } = scene
   const near = thingsIn(thingsOf(scene.landmarks, reading.show), road, projection)
@@ -172,35 +176,15 @@ export function cornerLabels(
   const placed = placedMarks(reading.marks, reading.show, road, projection)
   const clearance = drawnWidth(road, projection) / 2 + 2
   const room: Room = {
-    sheet: sheetBox(projection, -4),
+    sheet: within,
     boxes: [...taken, ...thingBoxes(things, road, projection, reading.reader)],
     lines: roadPieces(road, projection, 0).map((points) => ({ points, clearance })),
   }
   const labels = reading.labels ? markLabels(placed, room, reading.reader) : []
   const glyphs = placed.map(({ at: [x, y] }) => ({ x: x - 9, y: y - 9, width: 18, height: 18 }))
-  const left: Room = { ...room, boxes: [...room.boxes, ...glyphs, ...labels.map(({ box }) => box)], lines: room.lines }
+  const left: Room = { ...room, boxes: [...room.boxes, ...glyphs, ...labels.map(({ box }) => box)] }
   const names = reading.labels ? thingNames(things, road, projection, left, reading.reader) : []
   return [...names, ...labels.flatMap(({ shapes }) => shapes)]
-}
-
-export interface Furniture {
-  shapes: Shape[]
-  boxes: Room['boxes']
-}
-
-/** Scale bar at the lower left, needle at the lower right. */
-export function cornerFurniture(projection: Projection, words: CornerMapWords, reader: Reader): Furniture {
-  const { width, height, pxPerMetre } = projection
-  const r = reader === 'phone' ? 14 : 13
-  const bar = smallScaleBar([14, height - 18], pxPerMetre, Math.min(110, width / 3), { metres: words.metres, reader })
-  const at: Point = [width - r - 9, height - r - 11]
-  return {
-    shapes: [...bar.shapes, ...needle(at, r)],
-    boxes: [
-      { x: 10, y: height - 28, width: bar.right - 6, height: 24 },
-      { x: at[0] - r - 2, y: at[1] - r - 2, width: 2 * r + 4, height: 2 * r + 4 },
-    ],
-  }
 }
 
 /** One corner from above, whole and still: everything of the view in one list. */
@@ -210,7 +194,7 @@ export function cornerMap(
   projection: Projection,
   words: CornerMapWords,
 ): DisplayList {
-  const furniture = cornerFurniture(projection, words, reading.reader)
+  const furniture = mapFurniture(projection, words, reading.reader)
   const placed = placedMarks(reading.marks, reading.show, scene.road, projection)
   return {
     width: projection.width,

@@ -1,4 +1,5 @@
 import { type Box, circle, type Point, path, polygon, px, rect, type Shape, text } from '~/draw/display-list'
+import type { Projection } from '~/draw/projection'
 import { type Reader, textSize, textWidth } from '~/draw/text-styles'
 
 /** What a scale bar may be long: 1, 2 or 5 times a power of ten, in metres. */
@@ -89,6 +90,30 @@ export function needle([x, y]: Point, r: number, turn = 0): Shape[] {
     polygon('needle-dark', [tip, at(r / 5, 2), at(0, 0.5)]),
     path('needle-light', `M${left.join('L')}ZM${stem.join('L')}`),
   ]
+}
+
+/** What stays in a corner of a map, and the boxes it takes. */
+export interface Furniture {
+  shapes: Shape[]
+  boxes: Box[]
+}
+
+/** Scale bar at the lower left, needle at the lower right. */
+export function mapFurniture(
+  { width, height, pxPerMetre }: Projection,
+  words: { metres: (value: number) => string },
+  reader: Reader,
+): Furniture {
+  const r = reader === 'phone' ? 14 : 13
+  const bar = smallScaleBar([14, height - 18], pxPerMetre, Math.min(110, width / 3), { metres: words.metres, reader })
+  const at: Point = [width - r - 9, height - r - 11]
+  return {
+    shapes: [...bar.shapes, ...needle(at, r)],
+    boxes: [
+      { x: 10, y: height - 28, width: bar.right - 6, height: 24 },
+      { x: at[0] - r - 2, y: at[1] - r - 2, width: 2 * r + 4, height: 2 * r + 4 },
+    ],
+  }
 }
 
 /** Words of the sheet's cartouche; the drawing knows no language. */

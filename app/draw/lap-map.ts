@@ -7,7 +7,7 @@ import { type GroundFeature, type GroundKind, type Water, watersOf } from '~/dra
 import { boundsOf, clipRing, cornersOf, simplifyLine, simplifyRing } from '~/draw/lines'
 import type { PlateCorner } from '~/draw/number-plate'
 import { placeNames, waterNames } from '~/draw/place-names'
-import { type Plate, type PlatedCorner, placePlates, plateShapes, preferredBox, type SoftGround } from '~/draw/plates'
+import { type Plate, placePlates, platedCorner, plateShapes, preferredBox, type SoftGround } from '~/draw/plates'
 import { fitProjection, type Projection, sheetBox } from '~/draw/projection'
 import { reliefShapes, waterShapes } from '~/draw/relief-shapes'
 import type { Road } from '~/draw/road'
@@ -142,14 +142,6 @@ function setNames(table: Table, input: LapMapInput, waters: readonly Water[], re
   const names = placeNames(input.ground, table.projection, room, reader)
   room.boxes.push(...names.map(({ box }) => box))
   return { plates, names, room: { ...withShores(table, waters), boxes: room.boxes } }
-}
-
-function platedCorner(corner: LapCorner, road: Road, projection: Projection): PlatedCorner {
-  const left = corner.direction === 'right'
-  const apex = projection.toPx(road.at(corner.apex))
-  // A heading of 0° points up the picture, so that what lies left of it lies at 180° from the right.
-  const heading = (road.headingAt(corner.apex) * Math.PI) / 180
-  return { corner, apex, outside: left ? heading - Math.PI : heading }
 }
 
 const BUILT: readonly GroundKind[] = ['building', 'pit-building', 'grandstand', 'paddock', 'marsh', 'gravel']

@@ -1,8 +1,12 @@
+import type { TurnDirection } from '~/book/kinds'
 import { type Box, type GroupShape, type Point, rect, text } from '~/draw/display-list'
 import { boundsOf, insideRing, overlap } from '~/draw/lines'
 import { numberWidth, PLATE_HEIGHT, type PlateCorner, plateField, plateGroup } from '~/draw/number-plate'
+import type { Projection } from '~/draw/projection'
+import type { Road } from '~/draw/road'
 import { boxDistance2, grown, isFree, type Room } from '~/draw/room'
 import { type Reader, textSize, textWidth } from '~/draw/text-styles'
+import type { Station } from '~/track/units'
 
 export interface PlatedCorner {
   corner: PlateCorner
@@ -16,6 +20,18 @@ export interface Plate {
   corner: PlateCorner
   box: Box
   named: boolean
+}
+
+/** A corner where a plate is to be set: its apex in px, and the side of the road that its bend turns away from. */
+export function platedCorner(
+  corner: PlateCorner & { direction: TurnDirection; apex: Station },
+  road: Road,
+  projection: Projection,
+): PlatedCorner {
+  const apex = projection.toPx(road.at(corner.apex))
+  // A heading of 0° points up the picture: what lies left of it lies at 180° from the right.
+  const heading = (road.headingAt(corner.apex) * Math.PI) / 180
+  return { corner, apex, outside: corner.direction === 'right' ? heading - Math.PI : heading }
 }
 
 const GAP = 5

@@ -94,7 +94,7 @@ const LANDMARKS = [
   'gantry',
 ] as const
 
-const READING = ['driven-line', 'aim', 'datum', 'selected', 'leader', 'bend', 'bend-end', 'way'] as const
+const READING = ['driven-line', 'aim', 'datum', 'selected', 'leader', 'bend', 'bend-end', 'way', 'warning'] as const
 
 export type GlyphStyle = `mk-${MarkKind}`
 export type TetherStyle = `tether-${MarkKind}`

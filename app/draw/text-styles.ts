@@ -26,6 +26,7 @@ const FACES = {
   'mark-figure': { size: 13, weight: 560, stretch: 82 },
   'board-text': { size: 12, weight: 700, stretch: 82 },
   'thing-name': { size: 12, weight: 430, stretch: 82 },
+  'warning-text': { size: 13, weight: 620, stretch: 90 },
   'gear-digit': { size: 13.5, weight: 760, stretch: 82 },
 } as const satisfies Record<string, TextFace>
 

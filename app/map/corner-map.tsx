@@ -4,17 +4,17 @@ import {
   type CornerMapWords,
   type CornerReading,
   type CornerScene,
-  cornerFurniture,
   cornerGround,
   cornerLabels,
   cornerReading,
   DETAIL,
 } from '~/draw/corner-map'
+import { mapFurniture } from '~/draw/furniture'
 import { placedMarks } from '~/draw/map-marks'
 import type { Projection } from '~/draw/projection'
 import type { LngLat, Station } from '~/track/units'
 import { MapFrame, type MapFrameWords } from './map-frame'
-import { useMapView } from './map-view'
+import { labelRoom, useMapView } from './map-view'
 import { type MarkHandlers, MarkHandles } from './mark-handles'
 import { FixedLayer, SheetLayer } from './sheet-layer'
 
@@ -55,7 +55,8 @@ interface Dragged {
 function CornerLayers({ scene, reading, words, movable, onSelect, onMove, onNudge }: CornerMapProps) {
   const { road } = scene
   const { plane } = road.frame.centreline
-  const { window, sheet } = useMapView(plane, DETAIL)
+  const view = useMapView(plane, DETAIL)
+  const { window, sheet } = view
   const [dragged, setDragged] = useState<Dragged | null>(null)
   const { show, reader, selected } = reading
   const shown = useMemo(
@@ -63,11 +64,11 @@ function CornerLayers({ scene, reading, words, movable, onSelect, onMove, onNudg
     [scene, reading, dragged, words],
   )
   const ground = useMemo(() => cornerGround(scene, show, sheet, reader), [scene, show, sheet, reader])
-  const read = useMemo(
-    () => [...cornerReading(scene, shown, sheet), ...cornerLabels(scene, shown, sheet, [])],
-    [scene, shown, sheet],
-  )
-  const furniture = useMemo(() => cornerFurniture(window, words, reader).shapes, [window, words, reader])
+  const furniture = useMemo(() => mapFurniture(window, words, reader), [window, words, reader])
+  const read = useMemo(() => {
+    const room = labelRoom(view, furniture.boxes)
+    return [...cornerReading(scene, shown, sheet), ...cornerLabels(scene, shown, sheet, room.boxes, room.sheet)]
+  }, [scene, shown, sheet, view, furniture])
   const placed = useMemo(() => placedMarks(reading.marks, show, road, sheet), [reading.marks, show, road, sheet])
   const drop = (mark: string, of: Ground, to: LngLat) => {
     setDragged(null)
@@ -83,7 +84,7 @@ function CornerLayers({ scene, reading, words, movable, onSelect, onMove, onNudg
         onDrag={(mark, of, to) => setDragged({ mark, ground: of, to })}
         onMove={drop}
       />
-      <FixedLayer projection={window} shapes={furniture} />
+      <FixedLayer projection={window} shapes={furniture.shapes} />
     </>
   )
 }

@@ -1,6 +1,7 @@
 import type L from 'leaflet'
 import { useState } from 'react'
 import { useMap, useMapEvents } from 'react-leaflet'
+import type { Box } from '~/draw/display-list'
 import { makeProjection, type Projection } from '~/draw/projection'
 import type { Plane } from '~/track/plane'
 import { latLngToPlane, scaleAt } from './to-leaflet'
@@ -11,6 +12,8 @@ export interface MapView {
   window: Projection
   /** The part that is drawn: half as much again to every side, so that a drag does not run off the drawing. */
   sheet: Projection
+  /** The window within the sheet, px of the sheet. */
+  frame: Box
 }
 
 const PADDING = 0.5
@@ -28,7 +31,9 @@ function viewOf(map: L.Map, plane: Plane, detailFrom: number): MapView {
       height: Math.round(height * (1 + 2 * share)),
       detail,
     })
-  return { window: around(0), sheet: around(PADDING) }
+  const sheet = around(PADDING)
+  const frame = { x: (sheet.width - width) / 2, y: (sheet.height - height) / 2, width, height }
+  return { window: around(0), sheet, frame }
 }
 
 /** The view of the map around, renewed whenever it comes to rest. */
@@ -38,4 +43,20 @@ export function useMapView(plane: Plane, detailFrom: number): MapView {
   const renew = () => setView(viewOf(map, plane, detailFrom))
   useMapEvents({ moveend: renew, zoomend: renew, resize: renew })
   return view
+}
+
+/** Height and width of the buttons in the upper right corner, px, with their distance from the edge. */
+const BUTTONS = { width: 124, height: 50 }
+const INSET = 4
+
+/** Where labels may lie on the sheet, and the boxes they keep off: the map's buttons and its furniture. */
+export function labelRoom({ frame }: MapView, furniture: readonly Box[]): { sheet: Box; boxes: Box[] } {
+  const { x, y, width, height } = frame
+  return {
+    sheet: { x: x + INSET, y: y + INSET, width: width - 2 * INSET, height: height - 2 * INSET },
+    boxes: [
+      { x: x + width - BUTTONS.width, y, ...BUTTONS },
+      ...furniture.map((box) => ({ ...box, x: box.x + x, y: box.y + y })),
+    ],
+  }
 }

@@ -1,8 +1,8 @@
 import type { Ground } from '~/book/kinds'
-import { glyphKind } from '~/draw/glyphs'
+import { GLYPH_BOX, glyphKind } from '~/draw/glyphs'
 import { glyphSize, type PlacedMark } from '~/draw/map-marks'
 import type { Road } from '~/draw/road'
-import { MarkGlyph } from '~/draw/svg/glyph'
+import { GlyphMarks } from '~/draw/svg/glyph'
 import type { LngLat } from '~/track/units'
 import { Handle } from './handle'
 
@@ -29,6 +29,9 @@ interface MarkHandlesProps extends MarkHandlers {
 
 const LAYERS = { sim: 100, real: 200, selected: 1000 } as const
 
+/** A glyph's middle is the handle's, whatever its form adds below. */
+const VIEW_BOX = `${-GLYPH_BOX / 2} ${-GLYPH_BOX / 2} ${GLYPH_BOX} ${GLYPH_BOX}`
+
 /** The marks of a map as handles: simulator under real, the selected one on top. */
 export function MarkHandles({ placed, road, selected, mirror, movable, ...on }: MarkHandlesProps) {
   return placed.map(({ mark, ground, place, turn }) => {
@@ -47,14 +50,24 @@ export function MarkHandles({ placed, road, selected, mirror, movable, ...on }: 
         onDrop={(to) => on.onMove(mark.id, ground, to)}
         onNudge={({ forward, left }) => on.onNudge(mark.id, ground, { along: forward, across: left })}
       >
-        <MarkGlyph
-          kind={glyphKind(mark.kind, mark.role)}
-          form={place.form}
-          size={glyphSize(ground)}
-          gear={mark.gear}
-          turn={turn}
-          mirror={mirror}
-        />
+        <svg
+          className="drawing glyph"
+          width={glyphSize(ground)}
+          height={glyphSize(ground)}
+          viewBox={VIEW_BOX}
+          aria-hidden="true"
+        >
+          <GlyphMarks
+            {...{ turn, mirror }}
+            style={`mk-${mark.kind}`}
+            kind={glyphKind(mark.kind, mark.role)}
+            form={place.form}
+            x={0}
+            y={0}
+            size={GLYPH_BOX}
+            gear={mark.gear}
+          />
+        </svg>
       </Handle>
     )
   })
