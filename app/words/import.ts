@@ -46,6 +46,7 @@ export const importWords = {
   piecesMissing: 'Choose at least one piece.',
   close: 'Close it with a straight',
   anchor: 'Where on the globe is x = 0, y = 0?',
+  anchorAgain: 'Put it elsewhere on the globe?',
   longitude: 'Longitude',
   latitude: 'Latitude',
   anchorHint: 'In degrees, east and north positive: −12.6 and 54.2.',

@@ -7,6 +7,7 @@ import { type LapCorner, lapMap } from '~/draw/lap-map'
 import type { Road } from '~/draw/road'
 import { Drawing } from '~/draw/svg/drawing'
 import { metres } from '~/track/units'
+import { importWords } from '~/words/import'
 import { formatMetres } from '~/words/measures'
 import { circuitLine, contourNote, heightsLabel, heightWords, mapLabel } from '~/words/overview'
 import { directionOf } from './lap-facts'
@@ -54,10 +55,10 @@ function CircuitMapDrawing({ road, title, corners, ground = NONE, landmarks = NO
 }
 
 function HeightsDrawing({ road, corners, width }: Pick<CircuitSheetProps, 'road' | 'corners' | 'width'>) {
-  const list = useMemo(
-    () => lapHeights({ road, corners, width, height: heightsHeight(width), words: heightWords }),
-    [road, corners, width],
-  )
+  const list = useMemo(() => {
+    const named = corners.map((corner) => ({ ...corner, name: corner.name || importWords.turnName(corner.number) }))
+    return lapHeights({ road, corners: named, width, height: heightsHeight(width), words: heightWords })
+  }, [road, corners, width])
   if (!list) return null
   return (
     <div className="border-t border-rule-strong">

@@ -26,12 +26,13 @@ export function pageOf(draft: LayoutDraft, choices: ImportChoices): ImportPageDa
     read: draft.ok
       ? { positions: draft.reading.layout.positions.map(rounded), startAlong, reversed, corners: draft.corners }
       : null,
+    anchored: choices.anchor !== null,
     zones: Intl.supportedValuesOf('timeZone'),
   }
 }
 
 /** The form's fields: what was typed, else what the file says. */
-function fieldsOf(draft: LayoutDraft, { typed }: ImportChoices): ImportFields {
+function fieldsOf(draft: LayoutDraft, { typed, anchor }: ImportChoices): ImportFields {
   const layout = draft.ok ? draft.reading.layout : null
   const width = layout && widthOf(layout)
   return {
@@ -47,8 +48,8 @@ function fieldsOf(draft: LayoutDraft, { typed }: ImportChoices): ImportFields {
       : [],
     lap: '',
     pieces: [],
-    longitude: '',
-    latitude: '',
+    longitude: anchor ? String(anchor[0]) : '',
+    latitude: anchor ? String(anchor[1]) : '',
     startMetres: '',
     startWay: 'back',
     startFrom: '',

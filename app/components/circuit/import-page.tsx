@@ -17,7 +17,7 @@ import { CircuitSheet } from './circuit-sheet'
 import { CornerPicks } from './corner-picks'
 import type { ImportFields } from './import-schema'
 import { lapFacts } from './lap-facts'
-import { AnchorFields, LapChoice, PieceChoice } from './reading-choices'
+import { AnchorChoice, AnchorFields, LapChoice, PieceChoice } from './reading-choices'
 import { StartFields } from './start-fields'
 
 /** A circuit file on its way in, as its page is given it. */
@@ -32,6 +32,8 @@ export interface ImportPageData {
   problems: readonly { message: string; remedy: Remedy | null }[]
   warnings: readonly string[]
   read: { positions: readonly Position[]; startAlong: Along; reversed: boolean; corners: readonly DraftCorner[] } | null
+  /** The file is in metres, and was given its place on the globe. */
+  anchored: boolean
   zones: readonly string[]
 }
 
@@ -65,7 +67,9 @@ export function ImportPage({ page, lastResult }: ImportPageProps) {
       ) : (
         <>
           <ReadingChoices {...{ laps, lapTaken, pieces, fields }} />
-          <GiveUp />
+          <div>
+            <GiveUp />
+          </div>
         </>
       )}
     </Form>
@@ -93,13 +97,14 @@ function ReadLayout({
     <div className="grid gap-x-9 gap-y-7 min-[1000px]:grid-cols-[minmax(0,1fr)_420px]">
       <div className="grid content-start gap-5">
         <CircuitSheet road={road} title={page.fields.name || words.title} corners={named} width={780} />
-        <Warnings warnings={page.warnings} />
-      </div>
-      <div className="grid content-start gap-7">
         <Part title={words.asRead}>
           <Facts facts={lapFacts(road, corners.length)} />
           <ReadingChoices laps={page.laps} lapTaken={page.lapTaken} pieces={page.pieces} fields={fields} />
+          {page.anchored && <AnchorChoice fields={fields} />}
         </Part>
+        <Warnings warnings={page.warnings} />
+      </div>
+      <div className="grid content-start gap-7">
         <Part title={words.way}>
           <StartFields fields={fields} corners={named} />
         </Part>

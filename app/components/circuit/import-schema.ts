@@ -66,7 +66,7 @@ export const stepSchemas = (length: Metres) => ({
       outside: circuitWords.metresOutside(length),
     }),
     startWay: z.enum(['ahead', 'back']),
-    startFrom: z.string(),
+    startFrom: z.string().optional(),
   }),
   save: saveSchema,
 })

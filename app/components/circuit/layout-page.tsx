@@ -96,7 +96,7 @@ function Books({ page: { team, books } }: { page: LayoutPageData }) {
         {books.map(({ slug, name }) => (
           <li key={slug} className="border-b border-rule">
             <Link
-              className="flex min-h-9 items-center max-[799px]:min-h-12"
+              className="flex min-h-9 items-center underline max-[799px]:min-h-12"
               to={href('/teams/:team/books/:book', { team, book: slug })}
             >
               {name}

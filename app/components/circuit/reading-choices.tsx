@@ -1,6 +1,7 @@
 import type { FieldMetadata } from '@conform-to/react'
 import { FieldErrors, TextField } from '~/components/form/field'
 import { Button } from '~/components/ui/button'
+import { Icon } from '~/components/ui/icon'
 import type { Lap, Piece } from '~/track/read-layout'
 import { importWords as words } from '~/words/import'
 import { formatMetres } from '~/words/measures'
@@ -28,6 +29,16 @@ function ChoiceLine({ type, choice }: { type: 'radio' | 'checkbox'; choice: Choi
   )
 }
 
+/** The line that opens a list of choices. */
+function Opener({ children }: { children: string }) {
+  return (
+    <summary className="flex min-h-11 cursor-pointer items-center gap-1.5 [&::-webkit-details-marker]:hidden">
+      <Icon name="down" />
+      {children}
+    </summary>
+  )
+}
+
 /** The laps of a trace, to take another than the one taken. */
 export function LapChoice({
   field,
@@ -40,7 +51,7 @@ export function LapChoice({
 }) {
   return (
     <details open={field.errors !== undefined}>
-      <summary className="flex min-h-11 cursor-pointer items-center">{words.laps(taken, laps.length)}</summary>
+      <Opener>{words.laps(taken, laps.length)}</Opener>
       <ul className="max-h-80 overflow-y-auto border-t border-rule">
         {laps.map((lap) => (
           <ChoiceLine
@@ -69,7 +80,7 @@ export function PieceChoice({ field, pieces }: { field: FieldMetadata<string[]>;
   const used = pieces.filter((piece) => piece.used).length
   return (
     <details open={field.errors !== undefined}>
-      <summary className="flex min-h-11 cursor-pointer items-center">{words.pieces(used, pieces.length)}</summary>
+      <Opener>{words.pieces(used, pieces.length)}</Opener>
       <ul className="max-h-80 overflow-y-auto border-t border-rule">
         {pieces.map((piece) => (
           <ChoiceLine
@@ -97,18 +108,28 @@ interface AnchorFieldsProps {
   fields: { longitude: FieldMetadata<string>; latitude: FieldMetadata<string> }
 }
 
+/** Where a file in metres lies on the globe, to be put elsewhere. */
+export function AnchorChoice({ fields }: AnchorFieldsProps) {
+  return (
+    <details open={Boolean(fields.longitude.errors ?? fields.latitude.errors)}>
+      <Opener>{words.anchorAgain}</Opener>
+      <AnchorFields fields={fields} />
+    </details>
+  )
+}
+
 /** Where a file in metres lies on the globe. */
 export function AnchorFields({ fields: { longitude, latitude } }: AnchorFieldsProps) {
   return (
     <div className="grid max-w-md gap-3">
-      <p>{words.anchor}</p>
+      <p className="sr-only">{words.anchor}</p>
       <div className="grid grid-cols-2 gap-2.5">
         <TextField field={longitude} label={words.longitude} className="num" autoComplete="off" />
         <TextField field={latitude} label={words.latitude} className="num" autoComplete="off" />
       </div>
       <p className="field-hint">{words.anchorHint}</p>
       <div>
-        <Button look="primary" name="intent" value="anchor">
+        <Button name="intent" value="anchor">
           {words.giveAnchor}
         </Button>
       </div>

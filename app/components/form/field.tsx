@@ -70,6 +70,10 @@ export function SelectField({ field, label, hint, children }: Labelled & { child
   )
 }
 
+const FILE =
+  'input p-0 file:mr-3 file:min-h-[34px] file:cursor-pointer file:border-0 file:border-r file:border-solid file:border-ink ' +
+  'file:bg-transparent file:px-3.5 file:font-semibold max-[799px]:file:min-h-[46px]'
+
 /** A file to choose. */
 export function FileField({ field, label, hint, accept }: Labelled & { accept: string }) {
   const { key, ...input } = getInputProps(field, {
@@ -79,7 +83,7 @@ export function FileField({ field, label, hint, accept }: Labelled & { accept: s
   })
   return (
     <Frame field={field} label={label} hint={hint}>
-      <input key={key} {...input} accept={accept} className="input py-1.5" />
+      <input key={key} {...input} accept={accept} className={FILE} />
     </Frame>
   )
 }

@@ -26,6 +26,6 @@ export function PageHead({ title, lead, children }: { title: string; lead?: stri
 
 /** The body of a team's page: as wide as reading allows, with the gutters of the page. */
 export function PageBody({ children, width = 'wide' }: { children: ReactNode; width?: 'wide' | 'form' }) {
-  const limit = width === 'form' ? 'max-w-[560px]' : 'max-w-[1280px]'
+  const limit = width === 'form' ? 'max-w-[560px]' : 'max-w-[1440px]'
   return <main className={`w-full px-4 pt-7 pb-11 min-[800px]:px-14 ${limit}`}>{children}</main>
 }

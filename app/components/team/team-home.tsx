@@ -51,7 +51,7 @@ export function TeamHome({ team, books, circuits, changes, may }: TeamHomeData) 
             <ChangeList changes={changes.lines} />
             <p className="pt-3">
               <Link
-                className="inline-flex items-center max-[799px]:min-h-11"
+                className="inline-flex items-center underline max-[799px]:min-h-11"
                 to={href('/teams/:team/books/:book', { ...at, book: changes.slug })}
               >
                 {words.inBook(changes.book)}
@@ -77,7 +77,7 @@ function Section({
     <section>
       <div className="flex items-baseline justify-between gap-4 pb-1.5">
         <h2 className="h2">{title}</h2>
-        <Link className="sm inline-flex items-center max-[799px]:min-h-11" to={link.to}>
+        <Link className="sm inline-flex items-center underline max-[799px]:min-h-11" to={link.to}>
           {link.label}
         </Link>
       </div>
