@@ -1,8 +1,10 @@
+import { createServer as createHttpServer } from 'node:http'
 import express from 'express'
 import { createServer } from 'vite'
 
-const vite = await createServer({ server: { middlewareMode: true } })
 const web = express()
+const server = createHttpServer(web)
+const vite = await createServer({ server: { middlewareMode: true, hmr: { server } } })
 web.disable('x-powered-by')
 web.use(vite.middlewares)
 web.use(async (request, response, next) => {
@@ -14,8 +16,6 @@ web.use(async (request, response, next) => {
   }
 })
 
-const server = web.listen(Number(process.env.PORT), process.env.HOST || undefined, () => process.send?.('listening'))
-
 async function stop() {
   server.close()
   server.closeAllConnections()
@@ -23,3 +23,9 @@ async function stop() {
   process.exit(0)
 }
 process.once('SIGTERM', stop).once('disconnect', stop)
+
+server.on('error', (error) => {
+  console.error(`Port ${process.env.PORT} cannot be opened: ${error.message}`)
+  process.exit(1)
+})
+server.listen(Number(process.env.PORT), process.env.HOST || undefined, () => process.send?.('listening'))
