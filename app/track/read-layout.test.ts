@@ -189,6 +189,7 @@ describe('The file before it is read', () => {
     ['a PNG picture', new Uint8Array([0x89, 0x50, 0x4e, 0x47, 13, 10]), 'a.gpx', 'not-the-format'],
     ['zero bytes', new Uint8Array(90), 'a.csv', 'not-the-format'],
     ['a web page', text('<!DOCTYPE html><html><body>Sign in</body></html>'), 'a.gpx', 'not-the-format'],
+    ['a web page in small letters', text('<!doctype html><p>Sign in<br>'), 'a.csv', 'not-the-format'],
     ['a web page without a document type', text('<html><head></head></html>'), 'a.kml', 'not-the-format'],
     ['XML of another kind', text('<svg xmlns="http://www.w3.org/2000/svg"/>'), 'a.xml', 'not-the-format'],
     ['GeoJSON named as GPX', lineString(oval(40)), 'a.gpx', 'not-the-format'],

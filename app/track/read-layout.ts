@@ -14,7 +14,7 @@ import { type LngLat, type Metres, metres, type Position } from '~/track/units'
 export type { Piece } from '~/track/read/join'
 export type { Lap } from '~/track/read/laps'
 export type { HeightDatum } from '~/track/read/points'
-export type { Problem, ProblemCode, Remedy } from '~/track/read/problems'
+export type { Problem, Remedy } from '~/track/read/problems'
 export { largestFile } from '~/track/read/text'
 
 /** Road from the line to its right and left edge in metres, in the order the file draws. */

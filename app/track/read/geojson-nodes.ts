@@ -34,14 +34,21 @@ export interface Node {
   /** Number of values in `bbox`; NaN where it is no list of numbers. */
   bbox?: number
   crs?: string
-  readonly members: Set<string>
+  /** Which of `tellingMembers` it has: bit i for the i-th. */
+  members: number
 }
+
+/** Members that an object of one sort or another may not have (RFC 7946, 7.1). */
+export const tellingMembers = ['coordinates', 'geometry', 'geometries', 'features', 'properties']
+
+export const hasMember = (node: Node, member: string) => (node.members & (1 << tellingMembers.indexOf(member))) !== 0
 
 /** Reads one GeoJSON object, in whatever order its members stand. */
 export function readNode(json: JsonCursor, points: Points): Node {
-  const node: Node = { members: new Set() }
+  const node: Node = { members: 0 }
   json.members((key) => {
-    if (telling.has(key)) node.members.add(key)
+    const telling = tellingMembers.indexOf(key)
+    if (telling !== -1) node.members |= 1 << telling
     if (key === 'type' && json.isString()) node.type = json.string()
     else if (key === 'name' && json.isString()) node.name ??= json.string()
     else if (key === 'coordinates' && json.isArray()) node.coordinates = readCoordinates(json, points)
@@ -56,15 +63,13 @@ export function readNode(json: JsonCursor, points: Points): Node {
   return node
 }
 
-const telling = new Set(['coordinates', 'geometry', 'geometries', 'features', 'properties'])
-
 function readNodes(json: JsonCursor, points: Points): Node[] {
   const nodes: Node[] = []
   json.elements(() => {
     if (json.isObject()) nodes.push(readNode(json, points))
     else {
       json.skip()
-      nodes.push({ members: new Set() })
+      nodes.push({ members: 0 })
     }
   })
   return nodes

@@ -1,4 +1,4 @@
-import { type Node, type Run, readNode } from '~/track/read/geojson-nodes'
+import { hasMember, type Node, type Run, readNode } from '~/track/read/geojson-nodes'
 import { JsonCursor, jsonSizeProblem } from '~/track/read/json'
 import { extraValues, heightsLeftOut, leftOut } from '~/track/read/notes'
 import { coordinateFits, coordinateProblem } from '~/track/read/numbers'
@@ -78,7 +78,7 @@ class Collector {
   private check(node: Node, where: string): void {
     const mayNot =
       node.type === 'Feature' ? featureMayNot : node.type === 'FeatureCollection' ? collectionMayNot : geometryMayNot
-    const stray = mayNot.find((member) => node.members.has(member))
+    const stray = mayNot.find((member) => hasMember(node, member))
     if (stray) {
       const says = `GeoJSON does not allow “${stray}” in a ${node.type}. It is left out.`
       this.warnOnce(problem('member-not-allowed', says, where || undefined))

@@ -108,9 +108,12 @@ export function openFile(bytes: Uint8Array, fileName: string): OpenedFile | Prob
   if (start.includes('\0')) {
     return problem('not-the-format', 'This is not a text file. A circuit comes as GeoJSON, GPX, KML or CSV.')
   }
-  const family: Family = start[0] === '{' || start[0] === '[' ? 'json' : start[0] === '<' ? 'xml' : 'text'
+  const family = familyOfContent(start)
+  if (isWebPage(start)) {
+    return problem('not-the-format', 'The file holds a web page. Save the circuit’s file itself and bring that.')
+  }
   const promised = promises.get(extensionOf(fileName))
-  if (promised && familyOf[promised] !== family) return mismatch(promised, start)
+  if (promised && familyOf[promised] !== family) return mismatch(promised, family)
   const decoder = family === 'xml' && !mark ? declaredDecoder(start) : new TextDecoder(label)
   if (!(decoder instanceof TextDecoder)) return decoder
   const says = `The file begins with a ${mark?.words} byte order mark. It is left out.`
@@ -118,11 +121,13 @@ export function openFile(bytes: Uint8Array, fileName: string): OpenedFile | Prob
   return { family, ...(promised && { promised }), body, decoder, warnings }
 }
 
+const familyOfContent = (start: string): Family =>
+  start[0] === '{' || start[0] === '[' ? 'json' : start[0] === '<' ? 'xml' : 'text'
+
+const isWebPage = (start: string) => /^<(!doctype\s+html|html)\b/i.test(start)
+
 /** The problem of a file whose name promises another format than it holds. */
-export function mismatch(promised: Format, start: string): Problem {
-  const page = /^<(!doctype\s+html|html)/i.test(start)
-  const family: Family = start[0] === '{' || start[0] === '[' ? 'json' : start[0] === '<' ? 'xml' : 'text'
-  const holds = page ? 'a web page' : familyWords[family]
-  const says = `The name says ${formatWords[promised]}, but the file holds ${holds}. Save it again from where it came, or give it the right ending.`
+function mismatch(promised: Format, found: Family): Problem {
+  const says = `The name says ${formatWords[promised]}, but the file holds ${familyWords[found]}. Save it again from where it came, or give it the right ending.`
   return problem('not-the-format', says)
 }

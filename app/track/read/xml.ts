@@ -74,7 +74,7 @@ class Walk {
   ) {
     // Seven handlers at most: with an eighth V8 keeps the parser's properties in a dictionary, and it runs four times slower.
     this.parser.on('error', (error) => this.stop(brokenXml(error.message, this.where())))
-    this.parser.on('doctype', (text) => this.stop(doctypeProblem(text, this.where())))
+    this.parser.on('doctype', () => this.stop(doctypeProblem(this.where())))
     this.parser.on('attribute', ({ name }) => {
       if (name.startsWith('xmlns')) this.declares = true
       if (++this.attributes > mostAttributes) {
@@ -109,7 +109,7 @@ class Walk {
     this.hasDoctype ||= text.includes('<!DOCTYPE')
     this.prolog += text.length
     if (this.prolog <= longestProlog) return
-    this.stop(this.hasDoctype ? doctypeProblem('', this.where()) : brokenXml('no element begins in it', this.where()))
+    this.stop(this.hasDoctype ? doctypeProblem(this.where()) : brokenXml('no element begins in it', this.where()))
   }
 
   end(): void {
@@ -187,14 +187,7 @@ function splitName(name: string): [prefix: string, local: string] {
   return colon === -1 ? ['', name] : [name.slice(0, colon), name.slice(colon + 1)]
 }
 
-function doctypeProblem(text: string, where: string): Problem {
-  if (/^\s*html\b/i.test(text)) {
-    return problem(
-      'not-the-format',
-      'The file holds a web page. Save the GPX or KML file itself and bring that.',
-      where,
-    )
-  }
+function doctypeProblem(where: string): Problem {
   const says = 'The file carries a document type declaration, which is not read. Take the line with <!DOCTYPE out.'
   return problem('xml-doctype', says, where)
 }
