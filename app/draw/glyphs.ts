@@ -1,4 +1,4 @@
-import type { BrakeRole, MarkKind, Proof } from '~/book/kinds'
+import type { BrakeRole, MarkKind } from '~/book/kinds'
 
 /**
  * Mark glyphs as outlines in a 24 box, drawn for travel up the picture and a corner to the right. `brakestart` is the
@@ -95,9 +95,6 @@ export function glyphParts(kind: GlyphKind, form: GlyphForm): GlyphParts {
 /** The glyph of a mark. A brake mark without a role is the one to build to. */
 export const glyphKind = (kind: MarkKind, role: BrakeRole | null): GlyphKind =>
   kind === 'brake' && role === 'start' ? 'brakestart' : kind
-
-/** The form of a mark's place on the real track; a place without a finding was told. */
-export const glyphForm = (proof: Proof | null): GlyphForm => proof ?? 'told'
 
 /** State and tool icons: lines in a 20 box, 1.6 wide, round ends. */
 export const STATE_ICONS = {

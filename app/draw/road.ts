@@ -1,6 +1,6 @@
 import type { LayoutFrame } from '~/track/layout-frame'
 import type { PlanePoint } from '~/track/plane'
-import { type Offset, type Station, station } from '~/track/units'
+import { along, type Offset, type Station, station } from '~/track/units'
 
 /** The road of a layout in its plane, as drawings need it. Stations and offsets are the driving frame's. */
 export interface Road {
@@ -19,8 +19,8 @@ export interface Road {
 export function roadOf(frame: LayoutFrame, width: number): Road {
   const { centreline } = frame
   const at = (value: Station, offset = 0) => frame.planePointAt(value, offset as Offset)
-  const vertices = Array.from(centreline.stations.subarray(0, centreline.count), (along) =>
-    frame.toStation(along as never),
+  const vertices = Array.from(centreline.stations.subarray(0, centreline.count), (value) =>
+    frame.toStation(along(value)),
   ).sort((a, b) => a - b)
   const through = (from: Station, length: number, offset: number) => {
     const ahead = (value: Station) => frame.ahead(from, value)

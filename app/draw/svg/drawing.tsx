@@ -1,5 +1,5 @@
 import { type ElementType, memo, useId } from 'react'
-import { type DisplayList, eachShape, type GroupShape, type Shape, type TextShape } from '~/draw/display-list'
+import type { DisplayList, GroupShape, Shape, TextShape } from '~/draw/display-list'
 import { GlyphMarks } from '~/draw/svg/glyph'
 import './drawing.css'
 import './drawing-things.css'
@@ -109,9 +109,4 @@ function drawGroup(shape: GroupShape, key: number, Link: ElementType) {
       {children}
     </Link>
   )
-}
-
-/** Number of SVG elements a list becomes, to weigh a page. */
-export function countShapes(list: DisplayList): number {
-  return [...eachShape(list.shapes)].length
 }
