@@ -66,6 +66,13 @@ export const drivenBack = (choices: ImportChoices): ImportChoices => ({
   typed: renumbered(choices.typed),
 })
 
+/** The start line put at a place of the drawn line. */
+export const startAt = (choices: ImportChoices, startAlong: Along): ImportChoices => ({
+  ...choices,
+  startAlong,
+  typed: renumbered(choices.typed),
+})
+
 /**
  * The start line moved.
  * @param from station to count from, in the frame of the choices
@@ -73,11 +80,7 @@ export const drivenBack = (choices: ImportChoices): ImportChoices => ({
  */
 export const startMoved = (
   choices: ImportChoices,
-  frame: LayoutFrame,
+  frame: Pick<LayoutFrame, 'toAlong'>,
   from: Station,
   ahead: Metres,
-): ImportChoices => ({
-  ...choices,
-  startAlong: frame.toAlong(station(from + ahead)),
-  typed: renumbered(choices.typed),
-})
+): ImportChoices => startAt(choices, frame.toAlong(station(from + ahead)))

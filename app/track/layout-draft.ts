@@ -1,6 +1,8 @@
+import { makeCentreline } from '~/track/centreline'
 import { type ProposedCorner, proposeCornersInFrame } from '~/track/corners'
-import type { LayoutFrame } from '~/track/layout-frame'
-import type { Layout } from '~/track/read-layout'
+import { type ImportChoices, readOptions } from '~/track/import-choices'
+import { type LayoutFrame, makeFrame } from '~/track/layout-frame'
+import { type Layout, type LayoutReading, readLayout } from '~/track/read-layout'
 import { type Along, type Degrees, type Metres, metres, type Station } from '~/track/units'
 
 /** A proposed corner of a circuit on its way in. Stations are of the driving frame. */
@@ -51,4 +53,22 @@ export function widthOf({ widths }: Pick<Layout, 'widths'>): Metres | null {
   if (sums.length === 0) return null
   sums.sort((a, b) => a - b)
   return metres(sums[Math.floor(sums.length / 2)] ?? 0)
+}
+
+/** A circuit file read as its person chose: the reading, and where it holds a line the lap driven on it. */
+export type LayoutDraft =
+  | {
+      readonly ok: true
+      readonly reading: Extract<LayoutReading, { ok: true }>
+      readonly frame: LayoutFrame
+      readonly corners: DraftCorner[]
+    }
+  | { readonly ok: false; readonly reading: Extract<LayoutReading, { ok: false }> }
+
+/** Reads a circuit file with the choices made so far. */
+export function readDraft(bytes: Uint8Array, fileName: string, choices: ImportChoices): LayoutDraft {
+  const reading = readLayout(bytes, fileName, readOptions(choices))
+  if (!reading.ok) return { ok: false, reading }
+  const frame = makeFrame(makeCentreline(reading.layout.positions), choices)
+  return { ok: true, reading, frame, corners: draftCorners(frame) }
 }

@@ -1,5 +1,5 @@
-import type { Metres } from '~/track/units'
-import { formatKilometres, NBSP } from './measures'
+import { type Metres, metres } from '~/track/units'
+import { formatKilometres, formatMetres, NBSP } from './measures'
 
 /** A team's circuits, and the page of one layout. */
 export const circuitWords = {
@@ -82,3 +82,13 @@ export function layoutChangeWords(
   const told = [set.number, set.name].flatMap((change) => (change ? [`${change.to}, was ${change.from}`] : []))
   return `Corner ${number ?? ''}: ${told.join('; ')}`
 }
+
+/** What the map of a layout says of itself and its parts. */
+export const circuitMapWords = (title: string) => ({
+  label: `Map of ${title}`,
+  closer: 'Closer',
+  further: 'Further off',
+  whole: 'Whole lap',
+  metres: (value: number) => formatMetres(metres(value)),
+  start: 'Start line. Drag it along the road, or type its metres beside.',
+})

@@ -1,32 +1,33 @@
 import { type ReactNode, useDeferredValue, useMemo } from 'react'
-import type { LandmarkView } from '~/book/view'
 import { useSheetWidth } from '~/components/geometry/sheet-width'
-import { contourStep, type GroundFeature } from '~/draw/ground'
+import { CircuitMap } from '~/components/map/circuit-map'
+import { type CircuitCorner, circuitProjection, circuitScene } from '~/draw/circuit-map'
+import type { GroundFeature } from '~/draw/ground'
 import { lapHeights } from '~/draw/lap-heights'
-import { type LapCorner, lapMap } from '~/draw/lap-map'
 import type { Road } from '~/draw/road'
 import { Drawing } from '~/draw/svg/drawing'
-import { metres } from '~/track/units'
+import type { Along, LngLat } from '~/track/units'
+import { circuitMapWords } from '~/words/circuits'
 import { importWords } from '~/words/import'
-import { formatMetres } from '~/words/measures'
-import { circuitLine, contourNote, heightsLabel, heightWords, mapLabel } from '~/words/overview'
-import { directionOf } from './lap-facts'
+import { heightsLabel, heightWords } from '~/words/overview'
 
 interface CircuitSheetProps {
   road: Road
   title: string
-  corners: readonly LapCorner[]
+  corners: readonly CircuitCorner[]
   ground?: readonly GroundFeature[]
-  landmarks?: readonly LandmarkView[]
   /** Width in px that the server draws for. */
   width: number
+  /** The start line was dragged to this place of the drawn line. Left out where it may not be moved. */
+  onStartMove?: ((to: Along) => void) | undefined
 }
 
 const NONE: readonly never[] = []
+const PHONE_UNDER = 600
 
 /** Height of the map for its width: a phone's is squarer. */
-const mapHeight = (width: number) => Math.round(width * (width < 600 ? 0.88 : 0.66))
-const heightsHeight = (width: number) => (width < 600 ? 130 : 160)
+const mapHeight = (width: number) => Math.round(width * (width < PHONE_UNDER ? 0.88 : 0.66))
+const heightsHeight = (width: number) => (width < PHONE_UNDER ? 130 : 160)
 
 /** A layout as it is driven: map with its corners' plates, and below it the heights of one lap. */
 export function CircuitSheet({ width: guess, ...sheet }: CircuitSheetProps): ReactNode {
@@ -34,24 +35,24 @@ export function CircuitSheet({ width: guess, ...sheet }: CircuitSheetProps): Rea
   const width = useDeferredValue(measured)
   return (
     <div ref={ref} className="overflow-hidden border border-rule-strong">
-      <CircuitMapDrawing {...sheet} width={width} />
+      <MapDrawing {...sheet} width={width} />
       <HeightsDrawing road={sheet.road} corners={sheet.corners} width={width} />
     </div>
   )
 }
 
-function CircuitMapDrawing({ road, title, corners, ground = NONE, landmarks = NONE, width }: CircuitSheetProps) {
-  const list = useMemo(() => {
-    const step = contourStep(ground)
-    const words = {
-      title,
-      line: circuitLine(road.frame.length, corners.length, directionOf(road)),
-      contours: step === null ? null : contourNote(step),
-      metres: (value: number) => formatMetres(metres(value)),
-    }
-    return lapMap({ road, ground, landmarks, corners, width, height: mapHeight(width), words }).list
-  }, [road, title, corners, ground, landmarks, width])
-  return <Drawing list={list} label={mapLabel(title)} />
+function MapDrawing({ road, title, corners, ground = NONE, width, onStartMove }: CircuitSheetProps) {
+  const reader = width < PHONE_UNDER ? 'phone' : 'desk'
+  const height = mapHeight(width)
+  const scene = useMemo(() => circuitScene({ road, ground, corners, warnings: NONE }), [road, ground, corners])
+  const projection = useMemo(() => circuitProjection(road, { width, height }, reader), [road, width, height, reader])
+  const words = useMemo(() => circuitMapWords(title), [title])
+  const move = onStartMove && ((to: LngLat) => onStartMove(road.frame.toAlong(road.frame.locate(to).station)))
+  return (
+    <div className="relative" style={{ height }}>
+      <CircuitMap {...{ scene, projection, reader, words }} onStartMove={move} />
+    </div>
+  )
 }
 
 function HeightsDrawing({ road, corners, width }: Pick<CircuitSheetProps, 'road' | 'corners' | 'width'>) {

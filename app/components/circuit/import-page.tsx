@@ -1,6 +1,6 @@
 import { getFormProps, type SubmissionResult, useForm } from '@conform-to/react'
 import { type ReactNode, useMemo } from 'react'
-import { Form } from 'react-router'
+import { Form, useSubmit } from 'react-router'
 import { FormErrors } from '~/components/form/form-errors'
 import { Button } from '~/components/ui/button'
 import { Facts } from '~/components/ui/facts'
@@ -42,9 +42,11 @@ interface ImportPageProps {
   lastResult: SubmissionResult<string[]> | null | undefined
 }
 
+const FORM = 'import'
+
 /** One form: whatever step is taken, what was typed for the others goes along. */
 export function ImportPage({ page, lastResult }: ImportPageProps) {
-  const [form, fields] = useForm<ImportFields>({ id: 'import', lastResult, defaultValue: page.fields })
+  const [form, fields] = useForm<ImportFields>({ id: FORM, lastResult, defaultValue: page.fields })
   const { read, laps, lapTaken, pieces } = page
   return (
     <Form method="post" {...getFormProps(form)} className="grid gap-5">
@@ -88,6 +90,15 @@ function ReadLayout({
   fields: Fields
 }) {
   const { positions, startAlong, reversed, corners } = read
+  const submit = useSubmit()
+  const moveStart = (to: Along) => {
+    const form = document.getElementById(FORM)
+    if (!(form instanceof HTMLFormElement)) return
+    const sent = new FormData(form)
+    sent.set('intent', 'start-at')
+    sent.set('startAlong', String(to))
+    submit(sent, { method: 'post', preventScrollReset: true })
+  }
   const road = useMemo(
     () => roadOf(makeFrame(makeCentreline(positions), { startAlong, reversed }), 12),
     [positions, startAlong, reversed],
@@ -96,7 +107,13 @@ function ReadLayout({
   return (
     <div className="grid gap-x-9 gap-y-7 min-[1000px]:grid-cols-[minmax(0,1fr)_420px]">
       <div className="grid content-start gap-5">
-        <CircuitSheet road={road} title={page.fields.name || words.title} corners={named} width={780} />
+        <CircuitSheet
+          road={road}
+          title={page.fields.name || words.title}
+          corners={named}
+          width={780}
+          onStartMove={moveStart}
+        />
         <Part title={words.asRead}>
           <Facts facts={lapFacts(road, corners.length)} />
           <ReadingChoices laps={page.laps} lapTaken={page.lapTaken} pieces={page.pieces} fields={fields} />

@@ -5,7 +5,18 @@ import { circuitWords } from '~/words/circuits'
 import { importWords as words } from '~/words/import'
 
 /** The page of a circuit on its way in is one form, so that no step loses what was typed for another. */
-export const IMPORT_STEPS = ['keep', 'lap', 'pieces', 'close', 'anchor', 'reverse', 'start', 'save', 'cancel'] as const
+export const IMPORT_STEPS = [
+  'keep',
+  'lap',
+  'pieces',
+  'close',
+  'anchor',
+  'reverse',
+  'start',
+  'start-at',
+  'save',
+  'cancel',
+] as const
 export type ImportStep = (typeof IMPORT_STEPS)[number]
 
 export const stepOf = (intent: FormDataEntryValue | null): ImportStep =>
@@ -68,6 +79,7 @@ export const stepSchemas = (length: Metres) => ({
     startWay: z.enum(['ahead', 'back']),
     startFrom: z.string().optional(),
   }),
+  'start-at': z.object({ startAlong: z.coerce.number().min(0) }),
   save: saveSchema,
 })
 

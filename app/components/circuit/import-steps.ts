@@ -1,8 +1,8 @@
 import type { z } from 'zod'
 import type { CircuitId, CornerId, LayoutId } from '~/book/ids'
-import { drivenBack, type ImportChoices, type ImportTyped, readAnew, startMoved } from '~/track/import-choices'
+import { drivenBack, type ImportChoices, type ImportTyped, readAnew, startAt, startMoved } from '~/track/import-choices'
 import { asDrawn, type LayoutDraft } from '~/track/layout-draft'
-import { metres, station } from '~/track/units'
+import { along, metres, station } from '~/track/units'
 import { importWords as words } from '~/words/import'
 import type { CornerRow, SavedImport, stepSchemas } from './import-schema'
 
@@ -50,6 +50,8 @@ export function afterStep(choices: ImportChoices, draft: LayoutDraft, { step, va
       const ahead = value.startWay === 'back' ? -value.startMetres : value.startMetres
       return startMoved(choices, draft.frame, from, metres(ahead))
     }
+    case 'start-at':
+      return draft.ok ? startAt(choices, along(value.startAlong % draft.frame.length)) : choices
     default:
       return choices
   }

@@ -1,5 +1,5 @@
 import { type ReactNode, Suspense, useMemo } from 'react'
-import { Form, href, Link } from 'react-router'
+import { Form, href, Link, useSubmit } from 'react-router'
 import { PageBody, PageHead } from '~/components/frame/page-frame'
 import { useCentreline, useGround } from '~/components/geometry/geometry-store'
 import { ButtonLink } from '~/components/ui/button'
@@ -7,6 +7,7 @@ import { Facts } from '~/components/ui/facts'
 import { readGround } from '~/draw/ground'
 import { roadOf } from '~/draw/road'
 import { makeFrame } from '~/track/layout-frame'
+import type { Along } from '~/track/units'
 import { circuitWords as words } from '~/words/circuits'
 import { formatMetres } from '~/words/measures'
 import { CircuitSheet } from './circuit-sheet'
@@ -69,11 +70,24 @@ function Road({ page, children }: { page: LayoutPageData; children: ReactNode })
     () => roadOf(makeFrame(centreline, { startAlong, reversed }), roadWidth),
     [centreline, startAlong, reversed, roadWidth],
   )
+  const submit = useSubmit()
+  const moveStart = (to: Along) =>
+    submit(
+      { intent: 'start-at', seenStart: String(startAlong), startAlong: String(to) },
+      { method: 'post', preventScrollReset: true },
+    )
   const ground = useMemo(() => readGround(collection, centreline.plane), [collection, centreline])
   return (
     <div className="grid gap-x-9 gap-y-7 min-[1000px]:grid-cols-[minmax(0,1fr)_420px]">
       <div className="grid content-start gap-5">
-        <CircuitSheet road={road} title={circuit.name} corners={corners} ground={ground} width={page.sheet} />
+        <CircuitSheet
+          road={road}
+          title={circuit.name}
+          corners={corners}
+          ground={ground}
+          width={page.sheet}
+          onStartMove={page.may.change ? moveStart : undefined}
+        />
         <Facts
           facts={[
             ...lapFacts(road, corners.length),

@@ -11,6 +11,7 @@ import { PageBody, PageHead } from '~/components/frame/page-frame'
 import { importCircuit } from '~/db/circuits.server'
 import { dropImport, readImport, setImportOptions } from '~/db/imports.server'
 import { dbContext } from '~/middleware/context'
+import { readForm } from '~/middleware/read-form.server'
 import { allow, refusal, refusalOf } from '~/middleware/refusal.server'
 import { teamContext } from '~/middleware/team.server'
 import { choicesFrom } from '~/track/import-choices-schema'
@@ -43,7 +44,7 @@ export async function loader(args: Route.LoaderArgs) {
 export async function action(args: Route.ActionArgs) {
   const { db, actor, kept, choices: before, draft } = await draftOf(args)
   const { params } = args
-  const formData = await args.request.formData()
+  const formData = await readForm(args.request)
   const step = stepOf(formData.get('intent'))
   if (step === 'cancel') {
     await dropImport(db, actor, kept.id)

@@ -11,6 +11,7 @@ import { makeBook } from '~/db/books.server'
 import { readCars } from '~/db/cars.server'
 import { readCircuits } from '~/db/read-circuits.server'
 import { dbContext } from '~/middleware/context'
+import { readForm } from '~/middleware/read-form.server'
 import { allow, refusalOf } from '~/middleware/refusal.server'
 import { teamContext } from '~/middleware/team.server'
 import { bookWords as words } from '~/words/books'
@@ -51,7 +52,7 @@ const GONE: Record<string, string> = { layout: words.layoutGone, car: words.carG
 export async function action({ request, params, context }: Route.ActionArgs) {
   const { actor } = context.get(teamContext)
   allow(actor, 'book.make')
-  const submission = parseWithZod(await request.formData(), { schema: bookSchema })
+  const submission = parseWithZod(await readForm(request), { schema: bookSchema })
   const { status } = problem('form')
   if (submission.status !== 'success') return data(submission.reply(), { status })
   const db = context.get(dbContext)
