@@ -1,6 +1,8 @@
 import { expect, type Locator, type Page, test } from '@playwright/test'
-import { handleOf, lineOf } from './support/corner'
+import { handleOf, toDatumOf } from './support/corner'
 import { password, people, team } from './support/people'
+
+test.setTimeout(180_000)
 
 const mostTabs = 120
 
@@ -32,10 +34,10 @@ test('from sign-in to a mark nudged, by keyboard alone', async ({ page }) => {
 
   const handle = handleOf(page, /^Turn in, .*real track/)
   await tabTo(page, handle)
-  const before = Number(/(\d+) before/.exec((await handle.getAttribute('aria-label')) ?? '')?.[1])
+  const before = Number(/(\d+)\sbefore/.exec((await handle.getAttribute('aria-label')) ?? '')?.[1])
   await page.keyboard.press('Shift+ArrowUp')
-  await expect(lineOf(page, 'Turn in')).toContainText(`${before - 10} before`)
+  await expect(toDatumOf(page, 'Turn in')).toContainText(`${before - 10}`)
   await expect(page.getByRole('button', { name: /^Undo: turn in moved 10/ })).toBeVisible()
   await page.reload()
-  await expect(lineOf(page, 'Turn in')).toContainText(`${before - 10} before`)
+  await expect(toDatumOf(page, 'Turn in')).toContainText(`${before - 10}`)
 })

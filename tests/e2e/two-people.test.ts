@@ -1,5 +1,5 @@
 import { type Browser, expect, type Page, test } from '@playwright/test'
-import { lineOf } from './support/corner'
+import { lineOf, toDatumOf } from './support/corner'
 import { demoBook, people, signIn } from './support/people'
 
 const corner = `${demoBook}/corners/9`
@@ -24,21 +24,20 @@ test.describe('two people change one mark', () => {
     const manager = await atTheApex(browser, people.manager)
     await metresOf(coach).fill('3')
     await save(coach)
-    await expect(lineOf(coach, 'Apex')).toContainText(/\b3 (before|after)/)
+    await expect(toDatumOf(coach, 'Apex')).toHaveText(/^3\s(before|after)$/)
 
     await metresOf(manager).fill('7')
     await save(manager)
     const conflict = manager.getByRole('alert')
     await expect(conflict).toContainText('Two people changed Apex. Keep one.')
-    await expect(conflict).toContainText(/\b3\.0 (before|after)/)
-    await expect(conflict).toContainText(/\b7\.0 (before|after)/)
-    await expect(lineOf(manager, 'Apex')).toContainText(/\b3 (before|after)/)
+    await expect(conflict).toContainText(/Theirs3\.0\s(before|after)/)
+    await expect(conflict).toContainText(/Yours7\.0\s(before|after)/)
 
     await conflict.getByRole('button', { name: 'Keep yours' }).click()
     await expect(conflict).toBeHidden()
-    await expect(lineOf(manager, 'Apex')).toContainText(/\b7 (before|after)/)
+    await expect(toDatumOf(manager, 'Apex')).toHaveText(/^7\s(before|after)$/)
     await coach.reload()
-    await expect(lineOf(coach, 'Apex')).toContainText(/\b7 (before|after)/)
+    await expect(toDatumOf(coach, 'Apex')).toHaveText(/^7\s(before|after)$/)
   })
 
   test('different fields: both stand', async ({ browser }) => {
@@ -50,7 +49,7 @@ test.describe('two people change one mark', () => {
 
     await metresOf(manager).fill('11')
     await save(manager)
-    await expect(lineOf(manager, 'Apex')).toContainText(/\b11 (before|after)/)
+    await expect(toDatumOf(manager, 'Apex')).toHaveText(/^11\s(before|after)$/)
     await expect(lineOf(manager, 'Apex')).toContainText('93')
     await expect(manager.getByRole('alert')).toBeHidden()
   })

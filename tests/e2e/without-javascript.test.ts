@@ -1,5 +1,5 @@
 import { expect, test } from '@playwright/test'
-import { addMark, lineOf } from './support/corner'
+import { addMark, lineOf, toDatumOf } from './support/corner'
 import { demoBook, signIn } from './support/people'
 
 test.use({ javaScriptEnabled: false })
@@ -13,12 +13,12 @@ test('sign-in, list, corner, a mark added and taken back work before JavaScript'
   await expect(page.getByRole('heading', { name: 'Eelgrass', level: 1 })).toBeVisible()
   await expect(page.getByRole('img', { name: /^Map of Eelgrass/ })).toBeVisible()
 
-  await addMark(page, { kind: 'Lift', metres: '131', side: 'before', across: '0' })
-  const lift = lineOf(page, 'Lift')
-  await expect(lift).toContainText('131 before')
+  await addMark(page, { kind: 'Brake first', metres: '131', side: 'before', across: '0' })
+  const brake = lineOf(page, 'Brake first')
+  await expect(toDatumOf(page, 'Brake first')).toHaveText(/^131\sbefore$/)
   await page.getByRole('status').getByRole('button', { name: 'Undo' }).click()
   await expect(page.getByRole('status')).toContainText('Taken back')
-  await expect(lift).toHaveCount(0)
+  await expect(brake).toHaveCount(0)
 })
 
 test('what does not fit comes back with what was typed', async ({ page }) => {

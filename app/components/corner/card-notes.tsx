@@ -48,7 +48,7 @@ export function CardNotes({ page }: { page: CornerPageData }) {
           <>
             <dt>Sets up</dt>
             <dd>
-              <Link to={`../corners/${setsUp.number}`} relative="path">
+              <Link to={`../${setsUp.number}`} relative="path">
                 {setsUp.number} {setsUp.name}
               </Link>
             </dd>

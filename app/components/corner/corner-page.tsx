@@ -131,10 +131,10 @@ function PreviousNext({ page }: { page: CornerPageData }) {
   const nameOf = (number: string) => tabs.find((tab) => tab.number === number)?.name
   return (
     <nav className="previous-next" aria-label="Corners before and after">
-      <Link className="btn" to={`../corners/${previous}`} relative="path" rel="prev">
+      <Link className="btn" to={`../${previous}`} relative="path" rel="prev">
         <Icon name="left" /> {previous} {nameOf(previous)}
       </Link>
-      <Link className="btn" to={`../corners/${next}`} relative="path" rel="next">
+      <Link className="btn" to={`../${next}`} relative="path" rel="next">
         {next} {nameOf(next)} <Icon name="right" />
       </Link>
     </nav>

@@ -11,14 +11,14 @@ import { type CornerIntent, cornerForm } from '~/components/corner/mark-forms'
 import { markIntent } from '~/components/corner/mark-intent'
 import { changeData, cornerPageData, proposalData } from '~/components/corner/page-data'
 import { type CornerResult, intentResult, plainResult } from '~/components/corner/result'
-import { opensOnly } from '~/components/frame/revalidation'
+import { isSent, opensOnly } from '~/components/frame/revalidation'
 import { applyOperation } from '~/db/apply.server'
 import type { Db } from '~/db/database'
 import { decideProposal, listProposals } from '~/db/proposals.server'
 import { readChanges } from '~/db/read-changes.server'
 import { readNames } from '~/db/read-team.server'
 import { undoOperation } from '~/db/undo.server'
-import { bookContext } from '~/middleware/book.server'
+import { bookContext, readBookFor } from '~/middleware/book.server'
 import { dbContext } from '~/middleware/context'
 import { layOutGeometry } from '~/middleware/lay-out-geometry.server'
 import { readForm } from '~/middleware/read-form.server'
@@ -76,6 +76,7 @@ export async function action({ request, context, params }: Route.ActionArgs) {
   const sent = Object.fromEntries([...form].map(([name, value]) => [name, String(value)]))
   const { actor } = context.get(teamContext)
   const result = await perform(context.get(dbContext), actor, cut, submission.value, sent)
+  await readBookFor(context, params.book)
   return data({ result, lastResult: null }, STATUS[result.kind])
 }
 
@@ -108,7 +109,7 @@ async function perform(
 
 /** Opening a form or a mark asks the server nothing. */
 export const shouldRevalidate = (args: ShouldRevalidateFunctionArgs) =>
-  !opensOnly(args, ['show', 'condition']) && args.defaultShouldRevalidate
+  isSent(args) || (!opensOnly(args, ['show', 'condition']) && args.defaultShouldRevalidate)
 
 export default function Corner({ loaderData, actionData }: Route.ComponentProps) {
   return (

@@ -36,6 +36,15 @@ export const lineOf = (page: Page, name: string): Locator =>
     .getByRole('row')
     .filter({ has: page.getByRole('rowheader', { name }) })
 
+/** How far a mark is from the datum, as its line says it: "133 before". */
+export const toDatumOf = (page: Page, name: string): Locator => lineOf(page, name).getByRole('cell').first()
+
+/** Metres to the next mark, as the mark's line says them now. */
+export async function toNextOf(page: Page, name: string): Promise<number> {
+  const said = await lineOf(page, name).getByRole('cell').last().textContent()
+  return Number(/^(\d+)\s*m/.exec(said ?? '')?.[1])
+}
+
 /** A mark on the map, once the map can be moved. */
 export const handleOf = (page: Page, label: string | RegExp): Locator =>
   page.getByRole('group', { name: /^Map of / }).getByRole('button', { name: label })
