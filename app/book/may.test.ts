@@ -8,6 +8,7 @@ import { may } from './may'
 
 const team = 'team' as TeamId
 const as = (role: Role): Actor => ({ kind: 'person', person: ids.driver, team, role })
+const job: Actor = { kind: 'job', name: 'night', team }
 const allowed = (role: Role) => ACTIONS.filter((action) => may(as(role), action, { madeBy: ids.coach }).ok)
 
 describe('who may what', () => {
@@ -41,7 +42,14 @@ describe('who may what', () => {
     const writes: Action[] = ACTIONS.filter((action) => !READS.has(action) && action !== 'book.archive')
     for (const role of ROLES)
       for (const action of writes) expect(may(as(role), action, { archived: true }).ok, `${role} ${action}`).toBe(false)
-    expect(may(as('driver'), 'book.read', { archived: true }).ok).toBe(true)
+    for (const action of writes)
+      expect(may(job, action, { archived: true }), action).toEqual({ ok: false, reason: 'read-only' })
+    for (const actor of [as('driver'), job]) expect(may(actor, 'book.read', { archived: true }).ok).toBe(true)
+    for (const actor of [as('manager'), job]) expect(may(actor, 'book.archive', { archived: true }).ok).toBe(true)
+  })
+
+  it('lets a job do everything for its team in a book that is not archived', () => {
+    for (const action of ACTIONS) expect(may(job, action, { madeBy: ids.coach }), action).toEqual({ ok: true })
   })
 
   it('lets a stranger do nothing at all', () => {
