@@ -1,11 +1,18 @@
-import { refusal } from '~/middleware/refusal.server'
+import { formFields } from './form-fields'
+import { refusal } from './refusal.server'
 
 /**
- * The fields of a sent form.
+ * The fields of a sent form, as `formFields` lets them through.
  *
- * @throws a refusal where the body is no form, or a broken one
+ * @throws a refusal where the body is no form, a broken one or one that no page of ours sends
  */
 export async function readForm(request: Request): Promise<FormData> {
+  const fields = formFields(await sentForm(request))
+  if (!fields) throw refusal('broken-form')
+  return fields
+}
+
+async function sentForm(request: Request): Promise<FormData> {
   try {
     return await request.formData()
   } catch (error) {
