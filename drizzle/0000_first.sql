@@ -80,6 +80,7 @@ CREATE TABLE "centrelines" (
 	"hash" text NOT NULL,
 	"positions" jsonb NOT NULL,
 	"length" double precision NOT NULL,
+	"outline" double precision[] NOT NULL,
 	"created_at" timestamp with time zone DEFAULT now() NOT NULL,
 	CONSTRAINT "centrelines_team_id_hash_pk" PRIMARY KEY("team_id","hash"),
 	CONSTRAINT "centrelines_hash" CHECK ("centrelines"."hash" ~ '^[0-9a-f]{64}$')
@@ -351,6 +352,7 @@ CREATE TABLE "changes" (
 CREATE TABLE "operations" (
 	"team_id" uuid NOT NULL,
 	"id" uuid NOT NULL,
+	"arrival" bigint GENERATED ALWAYS AS IDENTITY (sequence name "operations_arrival_seq" INCREMENT BY 1 MINVALUE 1 MAXVALUE 9223372036854775807 START WITH 1 CACHE 1),
 	"book_id" uuid,
 	"layout_id" uuid,
 	"person_id" uuid,
@@ -481,7 +483,7 @@ CREATE INDEX "stretches_layout" ON "stretches" USING btree ("team_id","layout_id
 CREATE INDEX "findings_book" ON "findings" USING btree ("team_id","book_id","mark_id");--> statement-breakpoint
 CREATE INDEX "ties_landmark" ON "ties" USING btree ("team_id","landmark_id");--> statement-breakpoint
 CREATE INDEX "changes_batch" ON "changes" USING btree ("team_id","batch");--> statement-breakpoint
-CREATE INDEX "operations_proposed" ON "operations" USING btree ("team_id","created_at") WHERE status = 'proposed';--> statement-breakpoint
+CREATE INDEX "operations_proposed" ON "operations" USING btree ("team_id","arrival") WHERE status = 'proposed';--> statement-breakpoint
 CREATE INDEX "operations_batch" ON "operations" USING btree ("team_id","batch");--> statement-breakpoint
 CREATE INDEX "memberships_person" ON "memberships" USING btree ("person_id");--> statement-breakpoint
 CREATE UNIQUE INDEX "people_email" ON "people" USING btree (lower("email"));--> statement-breakpoint

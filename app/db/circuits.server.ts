@@ -7,6 +7,7 @@ import { type Json, OPERATION_VERSION, type Operation } from '~/book/operation'
 import type { Datum } from '~/book/place'
 import { makeCentreline } from '~/track/centreline'
 import { wrap } from '~/track/lap-frame'
+import { outlineOf } from '~/track/outline'
 import type { Position } from '~/track/units'
 import { newId } from './apply/new-id'
 import { applyAll } from './apply.server'
@@ -134,9 +135,11 @@ const withoutMinusZero = (positions: readonly Position[]) =>
 
 async function storeCentreline(db: Db, team: TeamId, drawn: readonly Position[]) {
   const positions = withoutMinusZero(drawn)
-  const { length } = makeCentreline(positions)
+  const line = makeCentreline(positions)
+  const { length } = line
   const hash = sha256(canonicalJson(positions)) as GeometryHash
-  await db.insert(centrelines).values({ teamId: team, hash, positions, length }).onConflictDoNothing()
+  const outline = outlineOf(line)
+  await db.insert(centrelines).values({ teamId: team, hash, positions, length, outline }).onConflictDoNothing()
   return { hash, length }
 }
 

@@ -2,6 +2,7 @@ import { sql } from 'drizzle-orm'
 import {
   boolean,
   check,
+  doublePrecision,
   foreignKey,
   index,
   integer,
@@ -51,6 +52,8 @@ export const centrelines = pgTable(
     positions: jsonb('positions').$type<Position[]>().notNull(),
     /** Metres of the closed ring. */
     length: measure('length').notNull(),
+    /** The ring in the small, for lists: as `outlineOf` makes it. */
+    outline: doublePrecision('outline').array().notNull(),
     createdAt: createdAt(),
   },
   (t) => [primaryKey({ columns: [t.teamId, t.hash] }), isHash('centrelines_hash', sql`${t.hash}`)],

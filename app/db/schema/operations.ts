@@ -37,6 +37,8 @@ export const operations = pgTable(
   {
     teamId: teamId(),
     id: uuid('id').$type<OperationId>().notNull(),
+    /** Order of arrival within the database: operations of one transaction share their instant. */
+    arrival: bigint('arrival', { mode: 'number' }).generatedAlwaysAsIdentity().notNull(),
     ...scope(),
     /** Who sent it; null for a job. */
     personId: uuid('person_id').$type<PersonId>(),
@@ -54,7 +56,7 @@ export const operations = pgTable(
   (t) => [
     primaryKey({ columns: [t.teamId, t.id] }),
     unique('operations_person').on(t.personId, t.id),
-    index('operations_proposed').on(t.teamId, t.createdAt).where(sql`status = 'proposed'`),
+    index('operations_proposed').on(t.teamId, t.arrival).where(sql`status = 'proposed'`),
     index('operations_batch').on(t.teamId, t.batch),
     foreignKey({ columns: [t.teamId, t.bookId], foreignColumns: [books.teamId, books.id] }),
     foreignKey({ columns: [t.teamId, t.layoutId], foreignColumns: [layouts.teamId, layouts.id] }),
