@@ -53,7 +53,7 @@ export function tellChanges(changes: readonly LoggedChange[], view: BookView): T
     const what = deedOf({ target, set, undoes }, frame)
     const found = known.get(target.id)
     if (!what || !found) continue
-    const key = batch ?? operation
+    const key = batch ? `${batch} ${by}` : operation
     const change = { operation, by, reason, what, count: 1, alike: true, ...found }
     const other = told.get(key)
     told.set(key, other ? together(other, change) : change)

@@ -1,4 +1,4 @@
-import { and, eq, type SQL, sql } from 'drizzle-orm'
+import { and, eq, isNull, type SQL, sql } from 'drizzle-orm'
 import type { PgColumn } from 'drizzle-orm/pg-core'
 import type { Actor } from '~/book/actions'
 import type { PersonId } from '~/book/ids'
@@ -18,3 +18,6 @@ export function ownTeam(actor: Actor, teamId: PgColumn): SQL {
 
 /** The person who acts, or null for a job. */
 export const personOf = (actor: Actor): PersonId | null => (actor.kind === 'person' ? actor.person : null)
+
+/** The row is this person's; a job's where null. */
+export const isBy = (person: PgColumn, by: PersonId | null): SQL => (by === null ? isNull(person) : eq(person, by))

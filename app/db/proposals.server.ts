@@ -5,7 +5,7 @@ import { may } from '~/book/may'
 import type { Operation, Outcome, Scope } from '~/book/operation'
 import { applyAll } from './apply.server'
 import type { Db } from './database'
-import { ownTeam, personOf } from './own-team'
+import { isBy, ownTeam, personOf } from './own-team'
 import { operations } from './schema'
 
 /** An operation that waits for a coach. */
@@ -31,12 +31,12 @@ export async function listProposals(db: Db, actor: Actor, scope: Scope | null): 
     })
     .from(operations)
     .where(and(ownTeam(actor, operations.teamId), eq(operations.status, 'proposed'), inScope ?? undefined))
-    .orderBy(asc(operations.createdAt), asc(operations.id))
+    .orderBy(asc(operations.arrival))
   return rows.map((row) => ({ ...row, at: row.at.toISOString() }))
 }
 
 /**
- * A coach's answer to a proposal, and to all that was proposed together with it. An accepted one is held against what is now: where
+ * A coach's answer to a proposal, and to all that the same person proposed together with it. An accepted one is held against what is now: where
  * that has changed since, the answer is the conflict and the proposal still waits.
  */
 export async function decideProposal(
@@ -68,23 +68,30 @@ interface Waiting {
   batch: string | null
 }
 
+/**
+ * An open proposal with all that its maker proposed together with it, locked, in the order in which they came in. A batch and its
+ * maker never change, so they are read before anything is locked: everyone who decides on a batch takes its locks in one order.
+ */
 async function lockProposals(db: Db, actor: Actor, id: OperationId): Promise<Waiting[]> {
-  const waiting = { id: operations.id, by: operations.personId, operation: operations.body, batch: operations.batch }
-  const isOpen = and(ownTeam(actor, operations.teamId), eq(operations.status, 'proposed'))
+  const ofTeam = ownTeam(actor, operations.teamId)
   const [asked] = await db
-    .select(waiting)
+    .select({ batch: operations.batch, by: operations.personId })
     .from(operations)
-    .where(and(isOpen, eq(operations.id, id)))
-    .for('update')
-  if (!asked?.batch) return asked ? [asked] : []
-  return db
-    .select(waiting)
+    .where(and(ofTeam, eq(operations.id, id)))
+  if (!asked) return []
+  const { batch, by } = asked
+  const together =
+    batch === null ? eq(operations.id, id) : and(eq(operations.batch, batch), isBy(operations.personId, by))
+  const open = await db
+    .select({ id: operations.id, by: operations.personId, operation: operations.body, batch: operations.batch })
     .from(operations)
-    .where(and(isOpen, eq(operations.batch, asked.batch)))
-    .orderBy(asc(operations.createdAt), asc(operations.id))
+    .where(and(ofTeam, eq(operations.status, 'proposed'), together))
+    .orderBy(asc(operations.arrival))
     .for('update')
+  return open.some((proposal) => proposal.id === id) ? open : []
 }
 
+/** Accepts what one person proposed together: it is written under his name. */
 async function accept(db: Db, actor: Actor, proposals: readonly Waiting[]): Promise<Outcome> {
   const [first] = proposals
   const manner = {

@@ -1,12 +1,12 @@
-import { and, desc, eq, or } from 'drizzle-orm'
+import { and, desc, eq, or, type SQL } from 'drizzle-orm'
 import type { Actor } from '~/book/actions'
-import type { OperationId } from '~/book/ids'
+import type { OperationId, PersonId } from '~/book/ids'
 import { OPERATION_VERSION, type Operation, type Outcome, type Scope } from '~/book/operation'
 import { undoOf } from './apply/engine'
 import { newId } from './apply/new-id'
 import { applyBatch, type BatchOutcome } from './apply.server'
 import type { Db } from './database'
-import { ownTeam } from './own-team'
+import { isBy, ownTeam, personOf } from './own-team'
 import { changes } from './schema'
 
 const logged = {
@@ -18,8 +18,10 @@ const logged = {
   set: changes.set,
   madeAt: changes.madeAt,
   batch: changes.batch,
+  by: changes.byId,
 }
 type Logged = Pick<typeof changes.$inferSelect, 'set' | 'madeAt' | 'batch'> & {
+  by: PersonId | null
   operation: OperationId
   book: typeof changes.$inferSelect.bookId
   layout: typeof changes.$inferSelect.layoutId
@@ -28,7 +30,7 @@ type Logged = Pick<typeof changes.$inferSelect, 'set' | 'madeAt' | 'batch'> & {
 }
 
 /**
- * Takes back one operation of a scope, with all that was applied together with it. Nothing is taken back where something changed
+ * Takes back one operation of a scope, with all of the same person's that was applied together with it. Nothing is taken back where something changed
  * since: then the answer is the conflict.
  */
 export async function undoOperation(db: Db, actor: Actor, scope: Scope, operation: OperationId): Promise<Outcome> {
@@ -38,14 +40,14 @@ export async function undoOperation(db: Db, actor: Actor, scope: Scope, operatio
     .from(changes)
     .where(and(ownTeam(actor, changes.teamId), inScope, eq(changes.operationId, operation)))
   if (!line) return { kind: 'not-found' }
-  const undone = await takeBack(db, actor, await together(db, actor, line.batch, operation))
+  const undone = await takeBack(db, actor, await togetherWith(db, actor, line))
   if (undone.kind === 'stopped') return undone.outcome
   return undone.outcomes.length === 1 ? undone.outcomes[0]! : summary(undone)
 }
 
-/** Takes back every operation of a batch, in whatever scopes they are, or none of them. */
+/** Takes back every operation of a batch of the actor's own, in whatever scopes they are, or none of them. */
 export async function undoBatch(db: Db, actor: Actor, batch: string): Promise<BatchOutcome> {
-  const lines = await together(db, actor, batch, null)
+  const lines = await linesOf(db, actor, personOf(actor), eq(changes.batch, batch))
   if (lines.length === 0) return { kind: 'stopped', at: 0, outcome: { kind: 'not-found' } }
   return takeBack(db, actor, lines)
 }
@@ -56,20 +58,25 @@ function summary({ kind, outcomes }: Extract<BatchOutcome, { outcomes: unknown }
   return kind === 'proposed' ? { kind, rev } : { kind, rev, undo: null }
 }
 
-/** The lines of a batch, or of an operation and what followed from it; latest first. */
-async function together(db: Db, actor: Actor, batch: string | null, operation: OperationId | null): Promise<Logged[]> {
+/** The line of an operation, those of its batch, and what followed from it. */
+const togetherWith = (db: Db, actor: Actor, { operation, batch, by }: Logged) =>
+  linesOf(
+    db,
+    actor,
+    by,
+    or(
+      eq(changes.operationId, operation),
+      eq(changes.batch, operation),
+      batch === null ? undefined : eq(changes.batch, batch),
+    ),
+  )
+
+/** Lines of one person, latest first: the name of a batch is its sender's word, and says nothing of what others sent. */
+async function linesOf(db: Db, actor: Actor, by: PersonId | null, which: SQL | undefined): Promise<Logged[]> {
   return db
     .select(logged)
     .from(changes)
-    .where(
-      and(
-        ownTeam(actor, changes.teamId),
-        or(
-          batch === null ? undefined : eq(changes.batch, batch),
-          operation === null ? undefined : or(eq(changes.operationId, operation), eq(changes.batch, operation)),
-        ),
-      ),
-    )
+    .where(and(ownTeam(actor, changes.teamId), isBy(changes.byId, by), which))
     .orderBy(desc(changes.id))
 }
 

@@ -1,6 +1,7 @@
-import { eq } from 'drizzle-orm'
+import { eq, sql } from 'drizzle-orm'
 import { beforeAll, describe, expect, test } from 'vitest'
 import type { Actor } from '~/book/actions'
+import type { OperationId } from '~/book/ids'
 import type { Operation } from '~/book/operation'
 import { applyBatch, applyOperation } from '~/db/apply.server'
 import { decideProposal, listProposals } from '~/db/proposals.server'
@@ -12,9 +13,11 @@ import {
   type Book,
   db,
   expectKind,
+  inLine,
   makeTeam,
   makeTeamBook,
   markOf,
+  newId,
   newLandmark,
   newMark,
   operation,
@@ -145,6 +148,20 @@ describe('what another made', () => {
     expect(outcomes.map(({ kind }) => kind).sort()).toEqual(['applied', 'not-found'])
   })
 
+  test('two coaches deciding on two proposals of one batch at once decide once', async () => {
+    const theirs = await driversMark({ gear: 3, downshifts: 2 })
+    const batch = [gearChange(theirs, 3, 4), operation(book.scope, 'mark', theirs, { downshifts: [2, 1] })]
+    await applyBatch(db, book.team.second, batch)
+    const [first, second] = batch.map(({ id }) => id)
+    const held = sql`select from operations where id in (${first}, ${second}) for update`
+    const outcomes = await inLine(held, [
+      () => decideProposal(db, book.team.coach, second!, 'accept'),
+      () => decideProposal(db, book.team.manager, first!, 'decline'),
+    ])
+    expect(outcomes.map(({ kind }) => kind)).toEqual(['applied', 'not-found'])
+    expect(await markOf(book, theirs)).toMatchObject({ gear: 4, downshifts: 1 })
+  })
+
   test('a driver decides no proposal, another team sees none', async () => {
     const id = await driversMark({ gear: 3 })
     const proposal = gearChange(id, 3, 4)
@@ -169,6 +186,42 @@ describe('what another made', () => {
     expect((await markOf(book, mine))?.madeBy).toBe(book.team.second.person)
     expect((await markOf(book, theirs))?.gear).toBe(4)
   })
+
+  test('a proposed batch is accepted in the order in which it was sent, whatever its ids', async () => {
+    const theirs = await driversMark({ gear: 3 })
+    const [low, high] = [newId<OperationId>(), newId<OperationId>()]
+    const batch = [
+      { ...gearChange(theirs, 3, 4), id: high },
+      { ...gearChange(theirs, 4, 5), id: low },
+    ]
+    expect((await applyBatch(db, book.team.second, batch)).kind).toBe('proposed')
+    const waiting = await listProposals(db, book.team.coach, book.scope)
+    expect(waiting.map(({ id }) => id).filter((id) => id === low || id === high)).toEqual([high, low])
+    expectKind(await decideProposal(db, book.team.coach, low, 'accept'), 'applied')
+    expect((await markOf(book, theirs))?.gear).toBe(5)
+  })
+
+  test.each(['accept', 'decline'] as const)(
+    'to %s a batch leaves alone what another proposed under its name',
+    async (decision) => {
+      const theirs = await driversMark({ gear: 3, manner: 'full' })
+      const coachs = newMark()
+      expectKind(await applyOperation(db, book.team.coach, addsMark(book, coachs, { gear: 2 })), 'applied')
+      const batch = newId<string>()
+      const asked = { ...gearChange(theirs, 3, 4), batch }
+      const smuggled = { ...gearChange(coachs, 2, 6), batch }
+      const named = { ...operation(book.scope, 'mark', coachs, { downshifts: [null, 3] }), batch: asked.id as string }
+      expect((await applyOperation(db, book.team.second, asked)).kind).toBe('proposed')
+      for (const sent of [smuggled, named])
+        expect((await applyOperation(db, book.team.driver, sent)).kind).toBe('proposed')
+      await decideProposal(db, book.team.coach, asked.id, decision)
+      expect((await markOf(book, theirs))?.gear).toBe(decision === 'accept' ? 4 : 3)
+      expect(await markOf(book, coachs)).toMatchObject({ gear: 2, downshifts: null })
+      const waiting = (await listProposals(db, book.team.coach, book.scope)).map(({ id }) => id)
+      expect(waiting).toEqual(expect.arrayContaining([smuggled.id, named.id]))
+      expect(waiting).not.toContain(asked.id)
+    },
+  )
 
   test('moving one’s own landmark to which another’s mark is tied is a proposal; renaming it is not', async () => {
     const landmark = newLandmark()

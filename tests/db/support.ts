@@ -1,3 +1,4 @@
+import type { SQL } from 'drizzle-orm'
 import { drizzle } from 'drizzle-orm/node-postgres'
 import pg from 'pg'
 import { v7 } from 'uuid'
@@ -203,4 +204,36 @@ export function expectKind<Kind extends Outcome['kind']>(
 ): Extract<Outcome, { kind: Kind }> {
   if (outcome.kind !== kind) throw new Error(`${kind} expected: ${JSON.stringify(outcome)}`)
   return outcome as Extract<Outcome, { kind: Kind }>
+}
+
+/**
+ * Runs works that come upon what `lock` holds: each begins when all before it wait, and the lock is let go when all wait.
+ * @param lock a statement that locks rows
+ * @throws where a work ends without having waited
+ */
+export async function inLine<Answer>(lock: SQL, works: readonly (() => Promise<Answer>)[]): Promise<Answer[]> {
+  const running: Promise<Answer>[] = []
+  let ended = 0
+  await db.transaction(async (holder) => {
+    await holder.execute(lock)
+    for (const work of works) {
+      const run = work()
+      running.push(run)
+      const end = () => {
+        ended += 1
+      }
+      run.then(end, end)
+      while (ended === 0 && (await waiting()) < running.length);
+      if (ended > 0) throw new Error('nothing held it')
+    }
+  })
+  return Promise.all(running)
+}
+
+/** How many connections to this database wait for a lock. */
+async function waiting(): Promise<number> {
+  const { rows } =
+    await pool.query(`select count(distinct pid)::int as pids from pg_locks join pg_stat_activity using (pid)
+    where not granted and datname = current_database()`)
+  return rows[0].pids
 }

@@ -12,6 +12,7 @@ import {
   makeTeam,
   makeTeamBook,
   markOf,
+  newId,
   newLandmark,
   newMark,
   operation,
@@ -81,6 +82,24 @@ describe('a batch', () => {
     await applyBatch(db, book.team.coach, second)
     expectKind(await undoOperation(db, book.team.coach, book.scope, second[1]!.id), 'applied')
     expect(await gears()).toEqual([3, 4])
+  })
+
+  test('is undone without what another sent under its name or under the name of one of its operations', async () => {
+    const [mine, others] = [await addMark({ gear: 3 }), newMark()]
+    const batch = newId<string>()
+    const change = { ...gear(mine, 3, 4), batch }
+    expectKind(await applyOperation(db, book.team.coach, change), 'applied')
+    const adds = addsMark(book, others, { gear: 2 })
+    expectKind(await applyOperation(db, book.team.driver, { ...adds, batch }), 'applied')
+    const named = { ...operation(book.scope, 'mark', others, { manner: [null, 'trail'] }), batch: change.id as string }
+    expectKind(await applyOperation(db, book.team.driver, named), 'applied')
+
+    expectKind(await undoOperation(db, book.team.manager, book.scope, change.id), 'applied')
+    expect((await markOf(book, mine))?.gear).toBe(3)
+    expect(await markOf(book, others)).toMatchObject({ gear: 2, manner: 'trail' })
+    expect((await undoBatch(db, book.team.driver, batch)).kind).toBe('applied')
+    expect(await markOf(book, others)).toBeUndefined()
+    expect(await undoBatch(db, book.team.manager, batch)).toMatchObject({ outcome: { kind: 'not-found' } })
   })
 
   test('over a layout and its book takes both locks and both revisions', async () => {
