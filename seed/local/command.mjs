@@ -51,7 +51,9 @@ export function capture(command, { cwd = root, env, input, log } = {}) {
   })
 }
 
-const tail = (output, lines) => output.trimEnd().split('\n').slice(-lines).join('\n')
+const colours = new RegExp(`${String.fromCharCode(27)}\\[[0-9;]*m`, 'g')
+
+const tail = (output, lines) => output.replace(colours, '').trimEnd().split('\n').slice(-lines).join('\n')
 
 /**
  * Runs a command that must succeed.

@@ -36,6 +36,16 @@ function dynamics({ build, empty, served }) {
   }
 }
 
+const told = new Set()
+
+/** Why a suite could not run. Suites that share a preparation share its failure, which is told in full once. */
+function failureOf(error) {
+  if (!(error instanceof Stop)) return error.stack
+  const details = told.has(error) ? '' : error.details
+  told.add(error)
+  return `${error.message}\n${details}`
+}
+
 /** Runs one suite; what breaks in its preparation is a failed test. */
 async function runSuite(name, run) {
   let result
@@ -43,8 +53,7 @@ async function runSuite(name, run) {
     try {
       result = await run()
     } catch (error) {
-      const output = error instanceof Stop ? `${error.message}\n${error.details}` : error.stack
-      result = { count: single(false), output }
+      result = { count: single(false), output: failureOf(error) }
     }
     return `${result.count.passed} passed, ${result.count.failed} failed`
   })
