@@ -11,6 +11,7 @@ export default [
     route('books/:book', 'routes/book/layout.tsx', [
       index('routes/book/overview.tsx'),
       route('corners/:number', 'routes/book/corner.tsx'),
+      route('operations', 'routes/book/operations.ts'),
       route('corners/:number.geojson', 'routes/book/corner-geojson.ts'),
     ]),
     layout('routes/team/layout.tsx', [

@@ -21,7 +21,7 @@ export function ChangesList({ page }: { page: CornerPageData }) {
             <span className="muted">{firstName(page, change.by)}</span>
             {change.mayUndo ? (
               <Form method="post" preventScrollReset>
-                <Hidden intent="undo" operation={page.ids.operation} change={change.operation} />
+                <Hidden intent="undo" change={change.operation} />
                 <Button look="quiet" size="small" aria-label={`Undo: ${change.words}`}>
                   Undo
                 </Button>

@@ -2,6 +2,7 @@ import type { SubmissionResult } from '@conform-to/react'
 import { Suspense, useCallback, useState } from 'react'
 import { Link, useNavigate, useSearchParams } from 'react-router'
 import { GROUNDS, type Ground } from '~/book/kinds'
+import { DrawingBoundary } from '~/components/geometry/drawing-boundary'
 import { Icon } from '~/components/ui/icon'
 import { corner as words } from '~/words/corner'
 import { CardNotes } from './card-notes'
@@ -37,9 +38,11 @@ export function CornerPage({ page, result, lastResult }: CornerPageProps) {
       <div className="corner-main">
         <CornerHead page={page} linkWith={linkWith} />
         {latest ? <Outcome {...{ closeTo }} result={latest} operation={page.ids.operation} /> : null}
-        <Suspense fallback={<div className="map-panel waiting" />}>
-          <MapPanel {...{ page }} selected={open.mark} onAdd={onAdd} onSelect={onSelect} onResult={setFromMap} />
-        </Suspense>
+        <DrawingBoundary className="map-panel">
+          <Suspense fallback={<div className="map-panel waiting" />}>
+            <MapPanel {...{ page }} selected={open.mark} onAdd={onAdd} onSelect={onSelect} onResult={setFromMap} />
+          </Suspense>
+        </DrawingBoundary>
         <OpenForm {...{ page, open, closeTo, lastResult }} />
         {page.lines.length > 0 ? (
           <MarkTable page={page} selected={open.mark} linkTo={(mark) => linkWith({ mark, add: null })} />

@@ -32,11 +32,10 @@ export function LiveMap({ page, frame, edits, onAdd, onSelect, onReady, ...drawi
     const { station, offset } = frame.locate(at, datum)
     onAdd(typedFrom({ toDatum: frame.gap(datum, station), offset }))
   }
-  const move = (mark: string, ground: Ground, to: LngLat) =>
-    edits.move({ mark, ground, at: frame.locate(to, datum) }, true)
+  const move = (mark: string, ground: Ground, to: LngLat) => edits.move(mark, ground, frame.locate(to, datum), true)
   const nudge = (mark: string, ground: Ground, by: { along: number; across: number }) => {
     const at = drawing.reading.marks.find((one) => one.id === mark)?.[ground]
-    if (at) edits.move({ mark, ground, at: nudged(at, { ahead: by.along, left: by.across }, frame) }, false)
+    if (at) edits.move(mark, ground, nudged(at, { ahead: by.along, left: by.across }, frame), false)
   }
   const movable = useCallback(() => page.may.add, [page.may.add])
   return (

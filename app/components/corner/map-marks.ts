@@ -12,7 +12,7 @@ import type { CornerPageData } from './page-data'
 import type { PendingPlace } from './use-place-edits'
 
 /** The marks of the page as its map shows them; a place that is being moved stands where the hand has it. */
-export function mapMarks(page: CornerPageData, frame: LayoutFrame, pending: PendingPlace | null): MapMark[] {
+export function mapMarks(page: CornerPageData, frame: LayoutFrame, pending: readonly PendingPlace[]): MapMark[] {
   const shown = new Set(page.lines.map((line) => line.mark))
   return page.cut.corner.marks
     .filter((mark) => shown.has(mark.id))
@@ -32,10 +32,10 @@ function mapPlace(
   frame: LayoutFrame,
   mark: MarkView,
   ground: Ground,
-  pending: PendingPlace | null,
+  pending: readonly PendingPlace[],
 ): MapPlace | null {
   const place = mark[ground]
-  const moved = pending?.mark === mark.id && pending.ground === ground ? pending.at : null
+  const moved = pending.findLast((one) => one.mark.id === mark.id && one.ground === ground)?.at
   const at = moved ?? place
   if (!at) return null
   const form = place ? glyphForm(ground, place, page.condition, page.me) : ground === 'sim' ? 'sim' : 'told'

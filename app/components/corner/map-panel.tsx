@@ -1,6 +1,7 @@
 import { useMemo } from 'react'
 import { useSheetWidth } from '~/components/geometry/sheet-width'
 import { LiveOverStill } from '~/components/map/live-over-still'
+import { Toast } from '~/components/ui/notice'
 import { cornerMap } from '~/draw/corner-map'
 import { cornerMapWords, corner as words } from '~/words/corner'
 import { LiveMap } from './live-map'
@@ -38,6 +39,14 @@ export function MapPanel({ page, selected, onAdd, onSelect, onResult }: MapPanel
           {(onReady) => <LiveMap {...{ page, frame, edits, scene, reading, projection, onAdd, onSelect, onReady }} />}
         </LiveOverStill>
       </div>
+      {edits.isUnsent ? (
+        <Toast kind="caution">
+          {words.unsent}
+          <button type="button" onClick={edits.sendAgain}>
+            {words.sendAgain}
+          </button>
+        </Toast>
+      ) : null}
       {page.may.add ? <p className="map-hint">{words.mapHint}</p> : null}
     </>
   )

@@ -64,7 +64,7 @@ export function AddMarkForm({ page, closeTo, lastResult, tapped }: FormProps & {
   )
 }
 
-/** Changes a mark's place and what goes with it, or takes it off the book. */
+/** Changes a mark's place and what goes with it, takes the place away, or takes the mark off the book. */
 export function ChangeMarkForm({
   page,
   closeTo,
@@ -73,48 +73,51 @@ export function ChangeMarkForm({
   ground,
 }: FormProps & { mark: MarkView; ground: Ground }) {
   const place = mark[ground]
+  const shown = place ? typedFrom(place) : null
+  const details = { manner: mark.manner ?? '', gear: mark.gear?.toString() ?? '', speed: kmhField(mark.speed) }
   const [form, fields] = useForm({
     id: `change-${mark.id}-${ground}`,
     lastResult,
-    defaultValue: {
-      ...(place ? typedFrom(place) : { side: 'before', hand: 'left' }),
-      manner: mark.manner ?? '',
-      gear: mark.gear ?? '',
-      speed: kmhField(mark.speed),
-    },
+    defaultValue: { ...(shown ?? { side: 'before', hand: 'left' }), ...details },
     constraint: getZodConstraint(changeForm),
     onValidate: ({ formData }) => parseWithZod(formData, { schema: changeForm }),
     shouldRevalidate: 'onInput',
   })
+  const named = { operation: page.ids.operation, mark: mark.id }
+  const seen = JSON.stringify(seenOf(mark, ground))
   return (
     <div className="mark-form">
       <Form method="post" {...getFormProps(form)} preventScrollReset>
         <h2 className="h3">
           {markName(mark)} <span className="muted">{groundWord(ground).toLowerCase()}</span>
         </h2>
-        <Hidden
-          intent="change"
-          operation={page.ids.operation}
-          mark={mark.id}
-          ground={ground}
-          seen={JSON.stringify(seenOf(mark, ground))}
-        />
+        <Hidden intent="change" {...named} ground={ground} seen={seen} />
+        {shown ? <Hidden shown={JSON.stringify(shown)} /> : <Hidden {...details} />}
         <FormErrors form={form} />
         <div className="mark-fields">
           <PlaceFields {...{ page, fields }} />
-          <DetailFields fields={fields} />
+          {shown ? <DetailFields fields={fields} /> : null}
         </div>
-        <Buttons
-          closeTo={closeTo}
-          label={place ? 'Save' : `Give it a place ${ground === 'sim' ? 'in the simulator' : 'on the real track'}`}
-        />
+        <Buttons closeTo={closeTo} label={place ? words.save : words.givePlace(ground)} />
       </Form>
-      <Form method="post" className="drop-form" preventScrollReset>
-        <Hidden intent="drop" operation={page.ids.operation} mark={mark.id} />
-        <Button look="danger" size="small">
-          Take off the book
-        </Button>
-      </Form>
+      <div className="drop-forms">
+        {mark.sim && mark.real ? (
+          <Form method="post" preventScrollReset>
+            <Hidden intent="clear" {...named} ground={ground} seen={seen} />
+            <Button look="quiet" size="small">
+              {words.clear}
+            </Button>
+          </Form>
+        ) : null}
+        {place ? (
+          <Form method="post" preventScrollReset>
+            <Hidden intent="drop" {...named} />
+            <Button look="danger" size="small">
+              {words.drop}
+            </Button>
+          </Form>
+        ) : null}
+      </div>
     </div>
   )
 }

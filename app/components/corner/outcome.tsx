@@ -3,8 +3,15 @@ import { Toast } from '~/components/ui/notice'
 import { Hidden } from './mark-form'
 import type { CornerResult } from './result'
 
+interface OutcomeProps {
+  result: CornerResult
+  /** Fresh id for what is sent from here. */
+  operation: string
+  closeTo: string
+}
+
 /** What became of the change that was just sent: done with its undo, refused, or two versions to choose from. */
-export function Outcome({ result, operation, closeTo }: { result: CornerResult; operation: string; closeTo: string }) {
+export function Outcome({ result, operation, closeTo }: OutcomeProps) {
   if (result.kind === 'refused') return <Toast kind="danger">{result.words}</Toast>
   if (result.kind === 'done')
     return (
@@ -12,7 +19,7 @@ export function Outcome({ result, operation, closeTo }: { result: CornerResult; 
         {result.words}
         {result.undo ? (
           <Form method="post" preventScrollReset className="toast-form">
-            <Hidden intent="undo" operation={operation} change={result.undo} />
+            <Hidden intent="undo" change={result.undo} />
             <button type="submit">Undo</button>
           </Form>
         ) : null}

@@ -20,7 +20,7 @@ export interface CornerPageData {
   condition: ConditionId
   me: PersonId
   names: Record<string, string>
-  may: { add: boolean; changeOthers: boolean; decide: boolean }
+  may: { add: boolean; decide: boolean }
   changes: ChangeData[]
   proposals: ProposalData[]
   /** Fresh ids for the page's forms: what is sent twice is done once. */
@@ -110,7 +110,6 @@ export function cornerPageData({ actor, frame, ...rest }: Sources): CornerPageDa
     me: actor.person,
     may: {
       add: may(actor, 'mark.add', facts).ok,
-      changeOthers: may(actor, 'mark.change', { ...facts, madeBy: null }).ok,
       decide: may(actor, 'proposal.decide', facts).ok,
     },
   }

@@ -1,12 +1,12 @@
 import type { CornerCut } from '~/book/cuts'
-import type { OperationId } from '~/book/ids'
-import type { MarkIntent } from '~/book/intents'
+import type { MarkId, OperationId } from '~/book/ids'
 import { GROUNDS, type Ground } from '~/book/kinds'
 import type { Json, Operation, Outcome } from '~/book/operation'
+import type { MarkView } from '~/book/view'
 import { makeLapFrame } from '~/track/lap-frame'
 import { type Along, along, type Metres, metres } from '~/track/units'
 import { corner as words } from '~/words/corner'
-import { mannerWord, markKind } from '~/words/kinds'
+import { mannerWord } from '~/words/kinds'
 import { formatGear, formatSpeed, formatToDatum } from '~/words/measures'
 import { markName } from './mark-words'
 
@@ -16,32 +16,36 @@ export type CornerResult =
   | { kind: 'refused'; words: string }
   | { kind: 'conflict'; words: string; mine: string; theirs: string; again: Record<string, string> }
 
+/** What was asked of a mark, as far as its answer tells. */
+export type Asked =
+  | { intent: 'add'; mark: Pick<MarkView, 'kind' | 'role' | 'gear'>; ground: Ground }
+  | { intent: 'change' | 'clear'; mark: MarkId; ground: Ground }
+  | { intent: 'drop'; mark: MarkId }
+
 /** The words of an undo, or of a decided proposal. */
 export function plainResult(outcome: Outcome, done: string, conflict: string): CornerResult {
   if (outcome.kind === 'conflict') return { kind: 'refused', words: conflict }
-  return {
-    kind: refusedWords(outcome) ? 'refused' : 'done',
-    words: refusedWords(outcome) ?? done,
-    undo: null,
-  } as CornerResult
+  if (outcome.kind === 'proposed') return { kind: 'done', words: words.undoProposed, undo: null }
+  const refused = refusedWords(outcome)
+  return refused ? { kind: 'refused', words: refused } : { kind: 'done', words: done, undo: null }
 }
 
-/** What became of an intent on this corner's marks. `operation` is null where there was nothing to change. */
+/** What became of something asked of this corner's marks. `operation` is null where there was nothing to change. */
 export function intentResult(
   cut: CornerCut,
-  intent: MarkIntent,
+  asked: Asked,
   operation: Operation | null,
   outcome: Outcome,
   sent: Record<string, string>,
 ): CornerResult {
-  const name = nameOf(cut, intent)
+  const name = nameOf(cut, asked)
   const refused = refusedWords(outcome)
   if (refused) return { kind: 'refused', words: refused }
   if (outcome.kind === 'conflict' && operation) return conflict(cut, name, operation, outcome, sent)
   if (outcome.kind === 'proposed') return { kind: 'done', words: words.proposed(name), undo: null }
   if (!operation || outcome.kind === 'nothing') return { kind: 'done', words: words.nothing, undo: null }
   const undo = outcome.kind === 'applied' && outcome.undo ? operation.id : null
-  return { kind: 'done', words: doneWords(cut, name, intent, operation), undo }
+  return { kind: 'done', words: doneWords(cut, name, asked, operation), undo }
 }
 
 function refusedWords(outcome: Outcome): string | null {
@@ -50,18 +54,19 @@ function refusedWords(outcome: Outcome): string | null {
   return outcome.kind === 'invalid' ? words.invalid : null
 }
 
-function nameOf(cut: CornerCut, intent: MarkIntent): string {
-  if (intent.intent === 'add') return markKind(intent.mark.kind, intent.mark.role, intent.typed.gear)
-  const mark = cut.corner.marks.find((one) => one.id === intent.mark)
+function nameOf(cut: CornerCut, asked: Asked): string {
+  if (asked.intent === 'add') return markName(asked.mark)
+  const mark = cut.corner.marks.find((one) => one.id === asked.mark)
   return mark ? markName(mark) : words.mark
 }
 
-function doneWords(cut: CornerCut, name: string, intent: MarkIntent, operation: Operation): string {
-  if (intent.intent === 'drop') return words.dropped(name)
-  const { ground } = intent.typed
+function doneWords(cut: CornerCut, name: string, asked: Asked, operation: Operation): string {
+  if (asked.intent === 'drop') return words.dropped(name)
+  const { ground } = asked
+  if (asked.intent === 'clear') return words.cleared(name, ground)
   const toDatum = toDatumOf(cut, operation.set[ground]?.to)
   if (toDatum === null) return words.changed(name)
-  return intent.intent === 'add' ? words.added(name, toDatum, ground) : words.moved(name, toDatum, ground)
+  return asked.intent === 'add' ? words.added(name, toDatum, ground) : words.moved(name, toDatum, ground)
 }
 
 /** Two versions of the fields that met: in words, and the form that would put one's own over theirs. */

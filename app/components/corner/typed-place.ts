@@ -11,6 +11,9 @@ export interface TypedPlace {
   hand: 'left' | 'right'
 }
 
+/** Metres from the middle of the road beyond which nothing is on it. */
+export const FARTHEST_ACROSS = 60
+
 const figure = (value: number, decimals: number) => String(Number(Math.abs(value).toFixed(decimals)))
 
 /**

@@ -24,6 +24,8 @@ export function useFrame(page: CornerPageData): LayoutFrame {
 const HEIGHT = { desk: 400, phone: 320 } as const
 const PHONE_UNDER = 600
 
+const NOTHING: readonly PendingPlace[] = []
+
 export interface CornerDrawing {
   scene: CornerScene
   reading: CornerReading
@@ -35,7 +37,7 @@ export interface CornerDrawing {
 export function useCornerDrawing(
   page: CornerPageData,
   frame: LayoutFrame,
-  view: { selected: string | null; pending: PendingPlace | null; width: number },
+  view: { selected: string | null; pending: readonly PendingPlace[]; width: number },
 ): CornerDrawing {
   const { selected, pending } = view
   const width = useDeferredValue(view.width)
@@ -55,7 +57,7 @@ export function useCornerDrawing(
     [marks, page, selected, frame, reader],
   )
   const projection = useMemo(() => {
-    const stretch = stretchOfMarks(scene.road, page.cut.corner, mapMarks(page, frame, null))
+    const stretch = stretchOfMarks(scene.road, page.cut.corner, mapMarks(page, frame, NOTHING))
     return cornerProjection(scene.road, stretch, { width, height: HEIGHT[reader] })
   }, [scene, page, frame, width, reader])
   return { scene, reading, projection }

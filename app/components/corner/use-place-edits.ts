@@ -1,98 +1,172 @@
-import { useEffect, useRef, useState } from 'react'
-import { useFetcher } from 'react-router'
+import { useCallback, useEffect, useRef, useState } from 'react'
+import { href, useBlocker, useRevalidator } from 'react-router'
 import { v7 } from 'uuid'
-import type { GivenPlace } from '~/book/edits'
+import { changeMark, type GivenPlace, type SeenMark } from '~/book/edits'
+import type { OperationId } from '~/book/ids'
 import type { Ground } from '~/book/kinds'
-import type { MarkView } from '~/book/view'
+import type { Operation, Outcome } from '~/book/operation'
+import type { Place } from '~/book/place'
 import type { LayoutFrame } from '~/track/layout-frame'
 import { metres } from '~/track/units'
+import { corner as words } from '~/words/corner'
 import type { CornerPageData } from './page-data'
-import type { CornerResult } from './result'
-import { kmhField, seenOf, typedFrom } from './typed-place'
+import {
+  answered,
+  letGo,
+  nextMove,
+  type PlaceMove,
+  type PlaceQueue,
+  placeKey,
+  putMove,
+  sendAgain,
+  withState,
+} from './place-queue'
+import { type CornerResult, intentResult } from './result'
+import { FARTHEST_ACROSS, kmhField, seenOf, typedFrom } from './typed-place'
 
 /** A place moved on the map and not yet confirmed by the server. */
-export interface PendingPlace {
-  mark: string
-  ground: Ground
-  at: GivenPlace
-}
-
+export type PendingPlace = Pick<PlaceMove, 'mark' | 'ground' | 'at'>
 export type PlaceEdits = ReturnType<typeof usePlaceEdits>
 
 /** Presses of an arrow key within this many milliseconds are one change. */
 const PAUSE = 500
 
 /**
- * Moves of marks on the map: shown at once, sent when the hand rests, one after the other, so that each starts from what the
- * server has. What fails comes back as a result; the mark then stands where the book has it.
+ * Moves of marks on the map: shown at once, sent when the hand rests, one after the other. Leaving the page waits for what is
+ * under way; what cannot be sent stays and is sent again.
  */
 export function usePlaceEdits(page: CornerPageData, frame: LayoutFrame, onResult: (result: CornerResult) => void) {
-  const fetcher = useFetcher<{ result: CornerResult | null }>()
-  const [pending, setPending] = useState<PendingPlace | null>(null)
-  const [rested, setRested] = useState(false)
-  const sent = useRef<PendingPlace | null>(null)
-  const underWay = useRef(false)
-  const idle = fetcher.state === 'idle'
+  const [queue, setQueue] = useState<PlaceQueue>([])
+  useLettingGo(queue, setQueue)
+  useSending({ page, frame, queue, setQueue, onResult })
+  useStaying(queue)
+  const move = (mark: string, ground: Ground, at: GivenPlace, now: boolean) => {
+    const known = page.cut.corner.marks.find((one) => one.id === mark)
+    if (!known) return
+    if (Math.abs(at.offset) > FARTHEST_ACROSS) return onResult({ kind: 'refused', words: words.form.acrossFar })
+    const id = v7() as OperationId
+    const state = now ? 'waiting' : 'held'
+    setQueue((before) => putMove(before, { id, mark: known, ground, at, cut: page.cut, state, operation: null }))
+  }
+  return {
+    pending: queue as readonly PendingPlace[],
+    isUnsent: queue.some((one) => one.state === 'unsent'),
+    move,
+    sendAgain: () => setQueue(sendAgain),
+  }
+}
 
+type SetQueue = (change: (queue: PlaceQueue) => PlaceQueue) => void
+
+/** What is held waits to be sent after a pause, or at once when the focus goes elsewhere. */
+function useLettingGo(queue: PlaceQueue, setQueue: SetQueue) {
+  const held = queue.findLast((one) => one.state === 'held')?.id
   useEffect(() => {
-    if (!pending || rested) return
-    const rest = () => setRested(true)
+    if (held === undefined) return
+    const rest = () => setQueue(letGo)
     const timer = setTimeout(rest, PAUSE)
     document.addEventListener('focusout', rest)
     return () => {
       clearTimeout(timer)
       document.removeEventListener('focusout', rest)
     }
-  }, [pending, rested])
+  }, [held, setQueue])
+}
 
-  useEffect(() => {
-    if (!idle) {
-      underWay.current = true
-      return
-    }
-    if (sent.current) {
-      if (!underWay.current) return
-      underWay.current = false
-      const answered = sent.current === pending
-      sent.current = null
-      if (answered) {
-        setPending(null)
+interface Sending {
+  page: CornerPageData
+  frame: LayoutFrame
+  queue: PlaceQueue
+  setQueue: SetQueue
+  onResult: (result: CornerResult) => void
+}
+
+/** Sends the queue to the book's write path. Each move starts from what the last answer said of its place, or the page says. */
+function useSending({ page, frame, queue, setQueue, onResult }: Sending) {
+  const { revalidate } = useRevalidator()
+  const known = useRef(new Map<string, { place: Place; rev: number }>())
+  const send = useCallback(
+    async (move: PlaceMove, operation: Operation, team: string) => {
+      const outcome = await postOperation(team, move.cut.book.slug, operation)
+      if (outcome === null) {
+        setQueue((before) => withState(before, move.id, 'unsent', operation))
         return
       }
-    }
-    const mark = page.cut.corner.marks.find((one) => one.id === pending?.mark)
-    if (!pending || !rested || !mark) return
-    sent.current = pending
-    underWay.current = false
-    fetcher.submit(changeFields(page, frame, mark, pending), { method: 'post' })
-  }, [idle, pending, rested, page, frame, fetcher])
-
-  const result = idle ? fetcher.data?.result : null
-  useEffect(() => {
-    if (result) onResult(result)
-  }, [result, onResult])
-
-  return {
-    pending,
-    /** `now`: the hand has let go; otherwise more may follow. */
-    move: (place: PendingPlace, now: boolean) => {
-      setPending(place)
-      setRested(now)
+      const stored = operation.set[move.ground]?.to
+      if (stored && outcome.kind === 'applied')
+        known.current.set(placeKey(move), { place: stored as unknown as Place, rev: outcome.rev })
+      onResult(resultOf(move, operation, outcome, frame))
+      await revalidate()
+      setQueue((before) => answered(before, move.id))
     },
+    [frame, onResult, revalidate, setQueue],
+  )
+  useEffect(() => {
+    const next = nextMove(queue)
+    if (!next) return
+    const last = known.current.get(placeKey(next))
+    const seen = seenOf(next.mark, next.ground)
+    const place = last && last.rev > next.cut.book.rev ? last.place : seen.place
+    const operation = next.operation ?? operationOf(next, { ...seen, place }, frame)
+    setQueue((before) => (operation ? withState(before, next.id, 'sending', operation) : answered(before, next.id)))
+    if (operation) void send(next, operation, page.team)
+  }, [queue, frame, page.team, send, setQueue])
+}
+
+/** Going elsewhere waits until what is under way has been answered; closing the window with something unsent asks first. */
+function useStaying(queue: PlaceQueue) {
+  const isUnderWay = queue.some((one) => one.state !== 'unsent')
+  const blocker = useBlocker(isUnderWay)
+  useEffect(() => {
+    if (blocker.state === 'blocked' && !isUnderWay) blocker.proceed()
+  }, [blocker, isUnderWay])
+  const isUnsent = queue.length > 0
+  useEffect(() => {
+    if (!isUnsent) return
+    const ask = (event: BeforeUnloadEvent) => event.preventDefault()
+    window.addEventListener('beforeunload', ask)
+    return () => window.removeEventListener('beforeunload', ask)
+  }, [isUnsent])
+}
+
+function operationOf(move: PlaceMove, seen: SeenMark, frame: LayoutFrame): Operation | null {
+  const making = {
+    id: move.id,
+    madeAt: new Date().toISOString(),
+    scope: { kind: 'book', id: move.cut.book.id } as const,
+  }
+  return changeMark(making, move.mark.id, move.ground, seen, { ...seen, at: move.at }, frame)
+}
+
+/** The book's answer, null where there was none: no connection, or no longer signed in. */
+async function postOperation(team: string, book: string, operation: Operation): Promise<Outcome | null> {
+  try {
+    const response = await fetch(href('/teams/:team/books/:book/operations', { team, book }), {
+      method: 'POST',
+      headers: { 'Content-Type': 'application/json' },
+      body: JSON.stringify(operation),
+    })
+    const isAnswer = !response.redirected && response.headers.get('content-type')?.includes('application/json')
+    return isAnswer ? ((await response.json()) as Outcome) : null
+  } catch {
+    return null
   }
 }
 
-function changeFields(page: CornerPageData, frame: LayoutFrame, mark: MarkView, { ground, at }: PendingPlace) {
-  const toDatum = metres(frame.gap(page.cut.corner.datum.station, at.station))
-  return {
+function resultOf(move: PlaceMove, operation: Operation, outcome: Outcome, frame: LayoutFrame): CornerResult {
+  const { mark, ground, at, cut } = move
+  const toDatum = metres(frame.gap(cut.corner.datum.station, at.station))
+  const typed = typedFrom({ toDatum, offset: at.offset }, 3)
+  const seen = seenOf(mark, ground)
+  const again = {
     intent: 'change',
-    operation: v7(),
     mark: mark.id,
     ground,
-    seen: JSON.stringify(seenOf(mark, ground)),
-    ...typedFrom({ toDatum, offset: at.offset }, 3),
+    seen: JSON.stringify(seen),
+    ...typed,
     manner: mark.manner ?? '',
     gear: mark.gear === null ? '' : String(mark.gear),
     speed: kmhField(mark.speed),
   }
+  return intentResult(cut, { intent: 'change', mark: mark.id, ground }, operation, outcome, again)
 }

@@ -10,5 +10,9 @@ export function opensOnly(
   return kept.every((name) => currentUrl.searchParams.get(name) === nextUrl.searchParams.get(name))
 }
 
+/** Whether something was sent: then everything is read again, after a refusal or a conflict too, since others changed it. */
+export const isSent = ({ formMethod }: ShouldRevalidateFunctionArgs) => formMethod !== undefined && formMethod !== 'GET'
+
 /** For frames around pages: what they show does not hang on the address's query. */
-export const frameRevalidates = (args: ShouldRevalidateFunctionArgs) => !opensOnly(args) && args.defaultShouldRevalidate
+export const frameRevalidates = (args: ShouldRevalidateFunctionArgs) =>
+  isSent(args) || (!opensOnly(args) && args.defaultShouldRevalidate)

@@ -1,6 +1,7 @@
 import { type ReactNode, Suspense, useDeferredValue, useMemo } from 'react'
 import { href, Link } from 'react-router'
 import type { Overview } from '~/book/cuts'
+import { DrawingBoundary } from '~/components/geometry/drawing-boundary'
 import { useCentreline, useGround } from '~/components/geometry/geometry-store'
 import { useSheetWidth } from '~/components/geometry/sheet-width'
 import { type GroundFeature, readGround } from '~/draw/ground'
@@ -37,9 +38,11 @@ interface LapSheetProps {
 export function LapSheet(props: LapSheetProps) {
   return (
     <div className="lap-sheet">
-      <Suspense fallback={<Waiting />}>
-        <LapDrawings {...props} />
-      </Suspense>
+      <DrawingBoundary>
+        <Suspense fallback={<Waiting />}>
+          <LapDrawings {...props} />
+        </Suspense>
+      </DrawingBoundary>
     </div>
   )
 }

@@ -8,7 +8,7 @@ import { operationOf } from '~/book/intents'
 import { lookAt } from '~/book/look'
 import { CornerPage } from '~/components/corner/corner-page'
 import { type CornerIntent, cornerForm } from '~/components/corner/mark-forms'
-import { markIntent } from '~/components/corner/mark-intent'
+import { askedBy, markIntent } from '~/components/corner/mark-intent'
 import { changeData, cornerPageData, proposalData } from '~/components/corner/page-data'
 import { type CornerResult, intentResult, plainResult } from '~/components/corner/result'
 import { isSent, opensOnly } from '~/components/frame/revalidation'
@@ -102,9 +102,9 @@ async function perform(
   const frame = makeLapFrame({ length, startAlong: along(startAlong), reversed })
   const intent = markIntent(form, actor.person)
   const making = { id: form.operation as OperationId, madeAt: new Date().toISOString(), scope }
-  const operation = operationOf(intent, making, cut.corner, frame)
+  const operation = intent && operationOf(intent, making, cut.corner, frame)
   const outcome = operation ? await applyOperation(db, actor, operation) : ({ kind: 'nothing', rev: 0 } as const)
-  return intentResult(cut, intent, operation, outcome, sent)
+  return intentResult(cut, askedBy(form), operation, outcome, sent)
 }
 
 /** Opening a form or a mark asks the server nothing. */
