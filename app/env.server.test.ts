@@ -36,7 +36,6 @@ describe('settings', () => {
     ['DATABASE_URL', 'mysql://db.lanternside.example'],
     ['TRUST_PROXY_HOPS', '-1'],
     ['LOG_LEVEL', 'loud'],
-    ['TILE_URL', 'https://tiles.lanternside.example/{z}/{x}'],
   ])('refuse %s=%s by its name, not its value', (name, value) => {
     const read = () => readEnv({ DATABASE_URL: database, [name]: value })
     expect(read).toThrow(name)

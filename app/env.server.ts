@@ -12,7 +12,6 @@ const schema = z
     OWNER_DATABASE_URL: z.url({ protocol: /^postgres(ql)?$/ }).optional(),
     TRUST_PROXY_HOPS: z.coerce.number().int().min(0).max(10).default(0),
     LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
-    TILE_URL: z.string().includes('{z}').includes('{x}').includes('{y}').optional(),
     DEMO_PASSWORD: z.string().min(1).optional(),
   })
   .transform((env) => ({

@@ -54,7 +54,7 @@ app.use((_request, response, next) => {
 })
 app.use(requestId)
 app.use(requestLog(log))
-app.use(securityHeaders({ publicUrl: env.PUBLIC_URL, production, tileUrl: env.TILE_URL }))
+app.use(securityHeaders({ publicUrl: env.PUBLIC_URL, production }))
 app.get('/ready', async (_request, response) => {
   const ok = !draining && (await ping())
   response.status(ok ? 200 : 503).json({ ok })

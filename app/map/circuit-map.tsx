@@ -26,15 +26,14 @@ export interface CircuitMapProps {
   /** The start line was pushed by so many metres, further on positive. */
   onStartNudge?: ((metres: number) => void) | undefined
   onReady?: (() => void) | undefined
-  tileUrl?: string | undefined
 }
 
 /** A whole layout on a map: its way round, its bends with their plates, its start line to take hold of. */
 export function CircuitMap(props: CircuitMapProps) {
-  const { scene, projection, words, tileUrl, onReady } = props
+  const { scene, projection, words, onReady } = props
   const { plane } = scene.road.frame.centreline
   return (
-    <MapFrame {...{ plane, words, tileUrl, onReady }} home={projection}>
+    <MapFrame {...{ plane, words, onReady }} home={projection}>
       <CircuitLayers {...props} />
     </MapFrame>
   )

@@ -32,15 +32,14 @@ export interface CornerMapProps extends MarkHandlers {
   /** Left out where nothing may be added. */
   onAdd?: ((at: LngLat) => void) | undefined
   onReady?: (() => void) | undefined
-  tileUrl?: string | undefined
 }
 
 /** One corner on a map to move, tap and drag on. */
 export function CornerMap(props: CornerMapProps) {
-  const { scene, projection, words, tileUrl, onAdd, onReady } = props
+  const { scene, projection, words, onAdd, onReady } = props
   const { plane } = scene.road.frame.centreline
   return (
-    <MapFrame {...{ plane, words, tileUrl, onReady }} home={projection} onTap={onAdd}>
+    <MapFrame {...{ plane, words, onReady }} home={projection} onTap={onAdd}>
       <CornerLayers {...props} />
     </MapFrame>
   )

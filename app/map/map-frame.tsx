@@ -1,6 +1,6 @@
 import L from 'leaflet'
 import { type ReactNode, useEffect, useMemo } from 'react'
-import { MapContainer, TileLayer, useMap, useMapEvents } from 'react-leaflet'
+import { MapContainer, useMap, useMapEvents } from 'react-leaflet'
 import type { Projection } from '~/draw/projection'
 import type { Plane } from '~/track/plane'
 import type { LngLat } from '~/track/units'
@@ -22,8 +22,6 @@ interface MapFrameProps {
   /** The first view, and the one to come back to. */
   home: Projection
   words: MapFrameWords
-  /** Address pattern of tiles to lie under the drawing. Without it the map is in the layout's own plane. */
-  tileUrl?: string | undefined
   onTap?: ((at: LngLat) => void) | undefined
   /** Called once the map stands. */
   onReady?: (() => void) | undefined
@@ -34,9 +32,9 @@ interface MapFrameProps {
 const NEAREST = 40
 const FURTHER_OFF = 8
 
-/** A Leaflet map at the place and scale of a still picture; it pans, zooms and takes taps. */
-export function MapFrame({ plane, home, words, tileUrl, onTap, onReady, children }: MapFrameProps) {
-  const crs = useMemo(() => (tileUrl ? L.CRS.EPSG3857 : planeCrs(plane)), [plane, tileUrl])
+/** A Leaflet map in the layout's own plane, at the place and scale of a still picture; it pans, zooms and takes taps. */
+export function MapFrame({ plane, home, words, onTap, onReady, children }: MapFrameProps) {
+  const crs = useMemo(() => planeCrs(plane), [plane])
   const zoom = (pxPerMetre: number) => zoomFor(crs, plane, home.middle, pxPerMetre)
   return (
     <MapContainer
@@ -49,10 +47,9 @@ export function MapFrame({ plane, home, words, tileUrl, onTap, onReady, children
       zoomSnap={0}
       zoomDelta={0.5}
       zoomControl={false}
-      attributionControl={tileUrl !== undefined}
+      attributionControl={false}
       scrollWheelZoom={false}
     >
-      {tileUrl ? <TileLayer url={tileUrl} maxNativeZoom={19} maxZoom={22} /> : null}
       <Behaviour label={words.label} onTap={onTap} onReady={onReady} />
       {children}
       <MapButtons plane={plane} home={home} words={words} />

@@ -17,22 +17,19 @@ type Settings = {
   /** Origin of the server as people see it. */
   publicUrl: string
   production: boolean
-  /** Address pattern of map tiles, where the operator has some. */
-  tileUrl?: string | undefined
 }
 
 /**
  * Content-Security-Policy of one answer. Scripts and style sheets come from the server itself or carry the nonce;
  * style attributes are free, since drawings place things by them.
  */
-export function contentSecurityPolicy(nonce: string, { production, tileUrl }: Settings): string {
-  const tiles = tileUrl ? [new URL(tileUrl.replaceAll(/[{}]/g, '')).origin] : []
+export function contentSecurityPolicy(nonce: string, { production }: Settings): string {
   const directives: Record<string, string[]> = {
     'default-src': ["'self'"],
     'script-src': ["'self'", `'nonce-${nonce}'`],
     'style-src': ["'self'", `'nonce-${nonce}'`],
     'style-src-attr': ["'unsafe-inline'"],
-    'img-src': ["'self'", 'blob:', 'data:', ...tiles],
+    'img-src': ["'self'", 'blob:', 'data:'],
     'media-src': ["'self'", 'blob:'],
     'worker-src': ["'self'", 'blob:'],
     'connect-src': production ? ["'self'"] : ["'self'", 'ws:'],
