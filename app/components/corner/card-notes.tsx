@@ -1,5 +1,6 @@
 import { Link } from 'react-router'
 import type { CardView } from '~/book/view'
+import { cornerLabels as labels } from '~/words/corner-labels'
 import { downBy } from '~/words/kinds'
 import { formatGear, formatSpeed } from '~/words/measures'
 import type { CornerPageData } from './page-data'
@@ -9,31 +10,31 @@ export function CardNotes({ page }: { page: CornerPageData }) {
   const { card } = page.cut.corner
   const setsUp = page.cut.tabs.find((tab) => tab.id === card.setsUp)
   const texts: [string, string][] = [
-    ['Surface', card.surface],
-    ['Water', card.water],
-    ['The car', card.car],
-    ['Mistake', card.mistake],
-    ['Traffic', card.traffic],
-    ['Limits', card.limits],
-    ['Backup', card.backup],
-    ['Next', card.next],
+    [labels.terms.surface, card.surface],
+    [labels.terms.water, card.water],
+    [labels.terms.car, card.car],
+    [labels.terms.mistake, card.mistake],
+    [labels.terms.traffic, card.traffic],
+    [labels.terms.limits, card.limits],
+    [labels.terms.backup, card.backup],
+    [labels.terms.next, card.next],
   ]
   const gears = gearWords(card)
   return (
-    <section aria-label="Card">
+    <section aria-label={labels.card}>
       <dl className="pairs card-notes">
         {gears ? (
           <>
-            <dt>Gears</dt>
+            <dt>{labels.terms.gears}</dt>
             <dd>
               <b>{gears}</b>
             </dd>
           </>
         ) : null}
-        {card.line ? <Text term="Line" text={card.line} /> : null}
+        {card.line ? <Text term={labels.terms.line} text={card.line} /> : null}
         {card.kerbs.length > 0 ? (
           <>
-            <dt>Kerbs</dt>
+            <dt>{labels.terms.kerbs}</dt>
             <dd>
               {card.kerbs.map((kerb) => (
                 <p key={kerb.part}>
@@ -46,7 +47,7 @@ export function CardNotes({ page }: { page: CornerPageData }) {
         {texts.map(([term, text]) => (text ? <Text key={term} {...{ term, text }} /> : null))}
         {setsUp ? (
           <>
-            <dt>Sets up</dt>
+            <dt>{labels.terms.setsUp}</dt>
             <dd>
               <Link to={`../${setsUp.number}`} relative="path">
                 {setsUp.number} {setsUp.name}
@@ -63,7 +64,7 @@ function Text({ term, text }: { term: string; text: string }) {
   return (
     <>
       <dt>{term}</dt>
-      <dd className={term === 'Water' ? 'water-words' : undefined}>{text}</dd>
+      <dd className={term === labels.terms.water ? 'water-words' : undefined}>{text}</dd>
     </>
   )
 }

@@ -1,10 +1,11 @@
 import { Form } from 'react-router'
 import { Button } from '~/components/ui/button'
+import { cornerLabels as labels } from '~/words/corner-labels'
 import { Hidden } from './mark-form'
 import type { CornerPageData } from './page-data'
 
 const firstName = (page: CornerPageData, person: string | null) =>
-  (page.names[person ?? ''] ?? 'Former member').split(' ')[0]
+  (page.names[person ?? ''] ?? labels.former).split(' ')[0]
 
 /** The latest changes of this corner's marks; each may be taken back by who may change the mark. */
 export function ChangesList({ page }: { page: CornerPageData }) {
@@ -12,7 +13,7 @@ export function ChangesList({ page }: { page: CornerPageData }) {
   return (
     <section aria-labelledby="changes-head">
       <h2 className="h2" id="changes-head">
-        Changed lately
+        {labels.changes}
       </h2>
       <ul className="changes">
         {page.changes.map((change) => (
@@ -22,8 +23,8 @@ export function ChangesList({ page }: { page: CornerPageData }) {
             {change.mayUndo ? (
               <Form method="post" preventScrollReset>
                 <Hidden intent="undo" change={change.operation} />
-                <Button look="quiet" size="small" aria-label={`Undo: ${change.words}`}>
-                  Undo
+                <Button look="quiet" size="small" aria-label={labels.undoOf(change.words)}>
+                  {labels.undo}
                 </Button>
               </Form>
             ) : null}
@@ -40,7 +41,7 @@ export function ProposalsList({ page }: { page: CornerPageData }) {
   return (
     <section aria-labelledby="proposals-head">
       <h2 className="h2" id="proposals-head">
-        Proposed
+        {labels.proposed}
       </h2>
       <ul className="changes">
         {page.proposals.map((proposal) => (
@@ -51,14 +52,14 @@ export function ProposalsList({ page }: { page: CornerPageData }) {
               <Form method="post" preventScrollReset className="decide">
                 <Hidden intent="decide" proposal={proposal.id} />
                 <Button size="small" name="verdict" value="accept">
-                  Accept
+                  {labels.accept}
                 </Button>
                 <Button look="quiet" size="small" name="verdict" value="decline">
-                  Decline
+                  {labels.decline}
                 </Button>
               </Form>
             ) : (
-              <span className="muted">waits for the coach</span>
+              <span className="muted">{labels.waits}</span>
             )}
           </li>
         ))}

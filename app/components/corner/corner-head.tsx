@@ -1,14 +1,12 @@
 import { Link } from 'react-router'
 import { cornerState } from '~/book/cuts'
 import { GROUND_CHOICES } from '~/book/look'
-import type { GroundChoice } from '~/book/view'
 import { Icon } from '~/components/ui/icon'
+import { cornerLabels as labels } from '~/words/corner-labels'
 import { conditionWord } from '~/words/kinds'
 import { stateWord } from '~/words/overview'
 import type { LinkWith } from './corner-page'
 import type { CornerPageData } from './page-data'
-
-const SHOWN_WORDS: Record<GroundChoice, string> = { sim: 'Simulator', real: 'Real', both: 'Both' }
 
 /** Number plate and name of the corner, its state, and how it is looked at. */
 export function CornerHead({ page, linkWith }: { page: CornerPageData; linkWith: LinkWith }) {
@@ -20,7 +18,7 @@ export function CornerHead({ page, linkWith }: { page: CornerPageData; linkWith:
       </h1>
       <p className="muted">{stateWord(cornerState(corner, page.condition))}</p>
       <span className="spring" />
-      <nav className="seg" aria-label="Condition">
+      <nav className="seg" aria-label={labels.condition}>
         {conditions.map((condition) => (
           <Link
             key={condition.id}
@@ -32,17 +30,17 @@ export function CornerHead({ page, linkWith }: { page: CornerPageData; linkWith:
           </Link>
         ))}
       </nav>
-      <nav className="seg" aria-label="Places shown">
+      <nav className="seg" aria-label={labels.places}>
         {GROUND_CHOICES.map((choice) => (
           <Link key={choice} to={linkWith({ show: choice })} aria-current={choice === page.show} preventScrollReset>
             {choice === 'both' ? null : <i className={`ground-dot ${choice}`} aria-hidden="true" />}
-            {SHOWN_WORDS[choice]}
+            {labels.shown[choice]}
           </Link>
         ))}
       </nav>
       {page.may.add ? (
         <Link className="btn btn-small" to={linkWith({ add: '1', mark: null })} preventScrollReset>
-          <Icon name="plus" /> Add mark
+          <Icon name="plus" /> {labels.add}
         </Link>
       ) : null}
     </header>

@@ -5,6 +5,7 @@ import { GROUNDS, type Ground } from '~/book/kinds'
 import { DrawingBoundary } from '~/components/geometry/drawing-boundary'
 import { Icon } from '~/components/ui/icon'
 import { corner as words } from '~/words/corner'
+import { cornerLabels as labels } from '~/words/corner-labels'
 import { CardNotes } from './card-notes'
 import { ChangesList, ProposalsList } from './changes-list'
 import { CornerHead } from './corner-head'
@@ -53,7 +54,7 @@ export function CornerPage({ page, result, lastResult }: CornerPageProps) {
           {words.basis} {words.caution}
         </p>
       </div>
-      <aside className="corner-side" aria-label={`Card of ${corner.name}`}>
+      <aside className="corner-side" aria-label={labels.cardOf(corner.name)}>
         <CardNotes page={page} />
         <ProposalsList page={page} />
         <ChangesList page={page} />
@@ -133,7 +134,7 @@ function PreviousNext({ page }: { page: CornerPageData }) {
   const { previous, next, tabs } = page.cut
   const nameOf = (number: string) => tabs.find((tab) => tab.number === number)?.name
   return (
-    <nav className="previous-next" aria-label="Corners before and after">
+    <nav className="previous-next" aria-label={labels.around}>
       <Link className="btn" to={`../${previous}`} relative="path" rel="prev">
         <Icon name="left" /> {previous} {nameOf(previous)}
       </Link>

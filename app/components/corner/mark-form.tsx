@@ -7,6 +7,7 @@ import { SelectField, TextField } from '~/components/form/field'
 import { FormErrors } from '~/components/form/form-errors'
 import { Button } from '~/components/ui/button'
 import { acrossWords, corner as words } from '~/words/corner'
+import { cornerLabels as labels } from '~/words/corner-labels'
 import { groundWord, mannerWord, markKind } from '~/words/kinds'
 import { addForm, changeForm, kindOfChoice, MARK_CHOICES } from './mark-forms'
 import { markName } from './mark-words'
@@ -36,12 +37,12 @@ export function AddMarkForm({ page, closeTo, lastResult, tapped }: FormProps & {
   })
   return (
     <Form method="post" {...getFormProps(form)} className="mark-form" preventScrollReset>
-      <h2 className="h3">Add a mark</h2>
+      <h2 className="h3">{labels.addTitle}</h2>
       <Hidden intent="add" operation={page.ids.operation} mark={page.ids.mark} condition={page.condition} />
       <FormErrors form={form} />
       <div className="mark-fields">
-        <SelectField field={fields.kind} label="What happens">
-          <option value="">Choose</option>
+        <SelectField field={fields.kind} label={labels.what}>
+          <option value="">{labels.choose}</option>
           {MARK_CHOICES.map((choice) => {
             const { kind, role } = kindOfChoice(choice)
             return (
@@ -54,12 +55,12 @@ export function AddMarkForm({ page, closeTo, lastResult, tapped }: FormProps & {
         <GroundField field={fields.ground} />
         <PlaceFields {...{ page, fields }} />
         <DetailFields fields={fields} />
-        <SelectField field={fields.whose} label="Whose">
-          <option value="everyone">Everyone’s</option>
-          <option value="me">Mine</option>
+        <SelectField field={fields.whose} label={labels.whose}>
+          <option value="everyone">{labels.everyones}</option>
+          <option value="me">{labels.mine}</option>
         </SelectField>
       </div>
-      <Buttons closeTo={closeTo} label="Add mark" />
+      <Buttons closeTo={closeTo} label={labels.add} />
     </Form>
   )
 }
@@ -132,7 +133,7 @@ function Buttons({ closeTo, label }: { closeTo: string; label: string }) {
     <p className="mark-buttons">
       <Button look="primary">{label}</Button>
       <Link className="btn btn-quiet" to={closeTo} preventScrollReset>
-        Cancel
+        {labels.cancel}
       </Link>
     </p>
   )
@@ -142,7 +143,7 @@ type Fields<Name extends string> = Record<Name, FieldMetadata<unknown>>
 
 function GroundField({ field }: { field: FieldMetadata<unknown> }) {
   return (
-    <SelectField field={field} label="Where">
+    <SelectField field={field} label={labels.where}>
       {GROUNDS.map((ground) => (
         <option key={ground} value={ground}>
           {groundWord(ground)}
@@ -165,23 +166,23 @@ function PlaceFields({ page, fields }: { page: CornerPageData; fields: Fields<ke
     <>
       <TextField
         field={fields.metres}
-        label="Metres to the datum"
+        label={labels.toDatum}
         inputMode="decimal"
         hint={words.zero(corner.datum.words)}
       />
-      <SelectField field={fields.side} label="Which side of it">
-        <option value="before">before</option>
-        <option value="after">after</option>
+      <SelectField field={fields.side} label={labels.side}>
+        <option value="before">{labels.sides.before}</option>
+        <option value="after">{labels.sides.after}</option>
       </SelectField>
       <TextField
         field={fields.across}
-        label="Metres from the middle"
+        label={labels.across}
         inputMode="decimal"
-        hint={typed ? acrossWords(typed.offset, layout.roadWidth, car.width) : 'of the road, to the car’s centre'}
+        hint={typed ? acrossWords(typed.offset, layout.roadWidth, car.width) : labels.acrossHint}
       />
-      <SelectField field={fields.hand} label="To which side">
-        <option value="left">left</option>
-        <option value="right">right</option>
+      <SelectField field={fields.hand} label={labels.hand}>
+        <option value="left">{labels.hands.left}</option>
+        <option value="right">{labels.hands.right}</option>
       </SelectField>
     </>
   )
@@ -190,10 +191,10 @@ function PlaceFields({ page, fields }: { page: CornerPageData; fields: Fields<ke
 function DetailFields({ fields }: { fields: Fields<'manner' | 'gear' | 'speed'> }) {
   return (
     <>
-      <TextField field={fields.speed} label="Speed, km/h" inputMode="decimal" />
-      <TextField field={fields.gear} label="Gear" inputMode="numeric" />
-      <SelectField field={fields.manner} label="How">
-        <option value="">Not said</option>
+      <TextField field={fields.speed} label={labels.speed} inputMode="decimal" />
+      <TextField field={fields.gear} label={labels.gear} inputMode="numeric" />
+      <SelectField field={fields.manner} label={labels.manner}>
+        <option value="">{labels.notSaid}</option>
         {MANNERS.map((manner) => (
           <option key={manner} value={manner}>
             {mannerWord(manner)}

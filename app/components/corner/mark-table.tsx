@@ -4,6 +4,7 @@ import { Empty } from '~/components/ui/empty'
 import { MarkGlyph } from '~/draw/svg/glyph'
 import { type Metres, metres, type Seconds } from '~/track/units'
 import { acrossWords, corner as words } from '~/words/corner'
+import { cornerLabels as labels } from '~/words/corner-labels'
 import { downBy, mannerWord, proofWord } from '~/words/kinds'
 import { againstSimulator, formatKmhFigure, formatNumber } from '~/words/measures'
 import { glyphForm, glyphKind, markName, shownProof } from './mark-words'
@@ -21,27 +22,27 @@ export function MarkTable({ page, selected, linkTo }: MarkTableProps) {
   const marks = new Map<string, MarkView>(page.cut.corner.marks.map((mark) => [mark.id, mark]))
   return (
     <table className="ruled marks">
-      <caption className="sr-only">Marks of {page.cut.corner.name} in road order</caption>
+      <caption className="sr-only">{labels.table(page.cut.corner.name)}</caption>
       <thead>
         <tr>
-          <th scope="col">mark</th>
+          <th scope="col">{labels.columns.mark}</th>
           <th scope="col" className="r">
-            m to datum
+            {labels.columns.datum}
           </th>
           <th scope="col" className="r">
-            km/h
+            {labels.columns.speed}
           </th>
-          <th scope="col">how</th>
-          <th scope="col">tied to</th>
-          <th scope="col">where across</th>
-          <th scope="col">known, by</th>
-          <th scope="col">against simulator</th>
+          <th scope="col">{labels.columns.how}</th>
+          <th scope="col">{labels.columns.tie}</th>
+          <th scope="col">{labels.columns.across}</th>
+          <th scope="col">{labels.columns.known}</th>
+          <th scope="col">{labels.columns.against}</th>
           <th scope="col" className="r next">
-            <span className="next-head">to the next mark</span>
+            <span className="next-head">{labels.columns.next}</span>
             <span className="next-figures">
-              <span>m</span>
-              <span>lengths</span>
-              <span>s</span>
+              <span>{labels.columns.metres}</span>
+              <span>{labels.columns.lengths}</span>
+              <span>{labels.columns.seconds}</span>
             </span>
           </th>
         </tr>
@@ -83,7 +84,7 @@ function MarkRow({ page, line, mark, place, open, to }: MarkRowProps) {
             mirror={corner.direction === 'left'}
           />
           {markName(mark)}
-          {line.inherited ? <small> from dry</small> : null}
+          {line.inherited ? <small> {labels.fromDry}</small> : null}
         </Link>
       </th>
       <td className="r datum">
@@ -125,7 +126,9 @@ export function ToDatum({ value }: { value: Metres }) {
   return (
     <>
       <b className="num">{figure}</b>{' '}
-      <span className="muted">{figure === '0' ? 'at the datum' : value < 0 ? 'before' : 'after'}</span>
+      <span className="muted">
+        {figure === '0' ? labels.atDatum : value < 0 ? labels.sides.before : labels.sides.after}
+      </span>
     </>
   )
 }
@@ -136,10 +139,10 @@ function how(mark: MarkView) {
 }
 
 function Known({ page, line, place }: Pick<MarkRowProps, 'page' | 'line' | 'place'>) {
-  if (line.ground === 'sim') return <span className="muted">simulator only</span>
+  if (line.ground === 'sim') return <span className="muted">{labels.simOnly}</span>
   const proof = shownProof(place, page.condition, page.me)
   const state = proof?.proof ?? 'told'
-  const by = proof && (page.names[proof.by] ?? 'former member').split(' ')[0]
+  const by = proof && (page.names[proof.by] ?? labels.former).split(' ')[0]
   return (
     <span className={`proof proof-${state}`}>
       <i aria-hidden="true" /> {proofWord(state)} {by}
@@ -152,15 +155,15 @@ function ToNext({ metres: apart, lengths, seconds }: { metres: Metres; lengths: 
     <span className="next-figures num">
       <span>
         {formatNumber(apart)}
-        <span className="unit"> m</span>
+        <span className="unit"> {labels.columns.metres}</span>
       </span>
       <span>
         {formatNumber(metres(lengths), 1)}
-        <span className="unit"> lengths</span>
+        <span className="unit"> {labels.columns.lengths}</span>
       </span>
       <span>
         {seconds === null ? '' : formatNumber(seconds, 2)}
-        <span className="unit">{seconds === null ? '' : ' s'}</span>
+        <span className="unit">{seconds === null ? '' : ` ${labels.columns.seconds}`}</span>
       </span>
     </span>
   )

@@ -1,5 +1,6 @@
 import { Form, Link } from 'react-router'
 import { Toast } from '~/components/ui/notice'
+import { cornerLabels as labels } from '~/words/corner-labels'
 import { Hidden } from './mark-form'
 import type { CornerResult } from './result'
 
@@ -20,7 +21,7 @@ export function Outcome({ result, operation, closeTo }: OutcomeProps) {
         {result.undo ? (
           <Form method="post" preventScrollReset className="toast-form">
             <Hidden intent="undo" change={result.undo} />
-            <button type="submit">Undo</button>
+            <button type="submit">{labels.undo}</button>
           </Form>
         ) : null}
       </Toast>
@@ -43,20 +44,20 @@ function Conflict({
         <b>{result.words}</b>
       </p>
       <dl>
-        <dt>Theirs</dt>
+        <dt>{labels.theirs}</dt>
         <dd>{result.theirs}</dd>
         <dd>
           <Link className="btn" to={closeTo} replace preventScrollReset>
-            Keep theirs
+            {labels.keepTheirs}
           </Link>
         </dd>
-        <dt>Yours</dt>
+        <dt>{labels.yours}</dt>
         <dd>{result.mine}</dd>
         <dd>
           <Form method="post" preventScrollReset>
             <Hidden {...result.again} operation={operation} />
             <button type="submit" className="btn">
-              Keep yours
+              {labels.keepYours}
             </button>
           </Form>
         </dd>
