@@ -1,23 +1,18 @@
 import { createHash } from 'node:crypto'
-import { TimeSpan } from 'lucia'
 import { RateLimiterPostgres, RateLimiterRes } from 'rate-limiter-flexible'
 import { pool } from '~/db/client.server'
 import { type Seconds, seconds } from '~/track/units'
 import { clientOf } from './client-address'
+import { TRIES_PER_ACCOUNT, TRIES_PER_ADDRESS, TRIES_PER_CLIENT, TRIES_WITHIN } from './sign-in-limit'
 
-const WINDOW = new TimeSpan(15, 'm')
-const TABLE = { storeClient: pool, tableName: 'rate_limits', tableCreated: true, duration: WINDOW.seconds() }
-
-/** Wrong tries for one e-mail address from one client, within the window. */
-export const TRIES_PER_ADDRESS = 10
-/** Wrong tries from one client for any address, within the window: a whole paddock may share one. */
-export const TRIES_PER_CLIENT = 100
+const TABLE = { storeClient: pool, tableName: 'rate_limits', tableCreated: true, duration: TRIES_WITHIN.seconds() }
 
 const perAddress = new RateLimiterPostgres({ ...TABLE, keyPrefix: 'sign-in', points: TRIES_PER_ADDRESS })
 const perClient = new RateLimiterPostgres({ ...TABLE, keyPrefix: 'sign-in-client', points: TRIES_PER_CLIENT })
+const perAccount = new RateLimiterPostgres({ ...TABLE, keyPrefix: 'sign-in-account', points: TRIES_PER_ACCOUNT })
 
-const pairKey = (email: string, client: string) =>
-  createHash('sha256').update(`${client}\n${email}`).digest('base64url')
+const hashOf = (text: string) => createHash('sha256').update(text).digest('base64url')
+const pairKey = (email: string, client: string) => hashOf(`${client}\n${email}`)
 
 async function take(limiter: RateLimiterPostgres, key: string): Promise<Seconds | null> {
   try {
@@ -31,17 +26,26 @@ async function take(limiter: RateLimiterPostgres, key: string): Promise<Seconds 
 
 /**
  * Counts a try before its password is looked at, so that tries at the same time cannot pass together. Gives null where it
- * may go on, else how long to wait. Addresses are counted per client: nobody can lock another out from elsewhere.
+ * may go on, else how long to wait, at most the window. A try that is refused for its client counts for the client alone: from
+ * one place nobody can use up another's tries, and what many places together use up comes back with the window's end.
  *
  * @param email in the form in which addresses are compared
  */
 export async function takeTry(email: string, clientAddress: string): Promise<Seconds | null> {
   const client = clientOf(clientAddress)
-  return (await take(perClient, client)) ?? (await take(perAddress, pairKey(email, client)))
+  return (
+    (await take(perClient, client)) ??
+    (await take(perAddress, pairKey(email, client))) ??
+    (await take(perAccount, hashOf(email)))
+  )
 }
 
 /** Takes a try back that turned out right: only wrong ones count. */
 export async function giveBackTry(email: string, clientAddress: string): Promise<void> {
   const client = clientOf(clientAddress)
-  await Promise.all([perClient.reward(client), perAddress.delete(pairKey(email, client))])
+  await Promise.all([
+    perClient.reward(client),
+    perAddress.delete(pairKey(email, client)),
+    perAccount.reward(hashOf(email)),
+  ])
 }
