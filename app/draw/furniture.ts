@@ -141,7 +141,7 @@ export function cartouche(words: CartoucheWords, pxPerMetre: number, reader: Rea
   const lineWidth = textWidth(words.line, 'sheet-text', textSize('sheet-text', reader)) + 2 * NEEDLE + 12
   const inner = Math.max(
     textWidth(words.title, 'sheet-title', titleSize),
-    small ? lineWidth : textWidth(words.line, 'sheet-text'),
+    lineWidth,
     bar.right + (small ? 0 : noteWidth),
     bar.right + 12 + 2 * NEEDLE,
   )

@@ -108,7 +108,10 @@ export function clipLine(points: readonly Point[], box: Box): Point[][] {
   const pieces: Point[][] = []
   let piece: Point[] = []
   for (let i = 1; i < points.length; i++) {
-    const cut = clipSegment(points[i - 1]!, points[i]!, box)
+    const before = points[i - 1]!
+    const point = points[i]!
+    if (besides(before, point, box)) continue
+    const cut = clipSegment(before, point, box)
     if (!cut) continue
     const [from, to] = cut
     const last = piece.at(-1)
@@ -122,8 +125,16 @@ export function clipLine(points: readonly Point[], box: Box): Point[][] {
   return pieces
 }
 
+/** Whether both ends lie beyond the same side of a box. */
+const besides = ([ax, ay]: Point, [bx, by]: Point, { x, y, width, height }: Box) =>
+  (ax < x && bx < x) || (ay < y && by < y) || (ax > x + width && bx > x + width) || (ay > y + height && by > y + height)
+
+const inside = ([px, py]: Point, { x, y, width, height }: Box) =>
+  px >= x && py >= y && px <= x + width && py <= y + height
+
 /** The part of a segment inside a box, null where there is none. */
 export function clipSegment(a: Point, b: Point, box: Box): [Point, Point] | null {
+  if (inside(a, box) && inside(b, box)) return [a, b]
   const dx = b[0] - a[0]
   const dy = b[1] - a[1]
   let from = 0

@@ -6,7 +6,7 @@ import { isFree, type Room } from '~/draw/room'
 import { type Reader, type TextStyle, textSize, textWidth } from '~/draw/text-styles'
 
 /** Kinds whose name is set beside them. */
-const NAMED: readonly GroundKind[] = ['paddock', 'building', 'marsh', 'breakwater', 'mast']
+const NAMED: readonly GroundKind[] = ['paddock', 'building', 'marsh', 'mast']
 
 /** A name where it came to lie. */
 export interface PlacedName {

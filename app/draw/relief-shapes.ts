@@ -19,20 +19,37 @@ const WATER_STYLES: readonly StyleKey[] = [
   'water-line-5',
 ]
 
+interface Extent {
+  west: number
+  east: number
+  south: number
+  north: number
+}
+
+/** Extents of lines met before: ground is immutable, and every view asks for all of it. */
+const extents = new WeakMap<readonly PlanePoint[], Extent>()
+
+function extentOf(line: readonly PlanePoint[]): Extent {
+  const known = extents.get(line)
+  if (known) return known
+  const extent = { west: Infinity, east: -Infinity, south: Infinity, north: -Infinity }
+  for (const { x, y } of line) {
+    extent.west = Math.min(extent.west, x)
+    extent.east = Math.max(extent.east, x)
+    extent.south = Math.min(extent.south, y)
+    extent.north = Math.max(extent.north, y)
+  }
+  extents.set(line, extent)
+  return extent
+}
+
 /** Whether anything of a line may come within `border` px of the picture. */
 function comesNear(line: readonly PlanePoint[], projection: Projection, border: number): boolean {
-  const reachX = (projection.width / 2 + border) / projection.pxPerMetre
-  const reachY = (projection.height / 2 + border) / projection.pxPerMetre
-  const { middle } = projection
-  let [west, east, south, north] = [true, true, true, true]
-  for (const { x, y } of line) {
-    west &&= x < middle.x - reachX
-    east &&= x > middle.x + reachX
-    south &&= y < middle.y - reachY
-    north &&= y > middle.y + reachY
-    if (!west && !east && !south && !north) return true
-  }
-  return false
+  const { middle, pxPerMetre, width, height } = projection
+  const reachX = (width / 2 + border) / pxPerMetre
+  const reachY = (height / 2 + border) / pxPerMetre
+  const { west, east, south, north } = extentOf(line)
+  return east > middle.x - reachX && west < middle.x + reachX && north > middle.y - reachY && south < middle.y + reachY
 }
 
 /** Lines in px that come near the picture, cut to it and thinned. */
@@ -61,10 +78,19 @@ function onBorder(projection: Projection, border: number): (corner: Point) => bo
   return ([x, y]) => x <= box.x || x >= right || y <= box.y || y >= bottom
 }
 
+/** Rings as lines back to their first point, made once. */
+const closedRings = new WeakMap<readonly PlanePoint[], PlanePoint[]>()
+
+function closed(ring: readonly PlanePoint[]): PlanePoint[] {
+  const line = closedRings.get(ring) ?? [...ring, ring[0]!]
+  closedRings.set(ring, line)
+  return line
+}
+
 /** Paper, the tint of the lowest contour, the contours. */
 export function reliefShapes(features: readonly GroundFeature[], projection: Projection): Shape[] {
   const contours = features.filter(({ kind, height }) => kind === 'contour' && height !== null)
-  const linesOf = ({ rings, lines }: GroundFeature) => [...lines, ...rings.map((ring) => [...ring, ring[0]!])]
+  const linesOf = ({ rings, lines }: GroundFeature) => [...lines, ...rings.map(closed)]
   const lowest = Math.min(...contours.map(({ height }) => height!))
   const tinted = contours
     .filter(({ height }) => height === lowest)

@@ -25,6 +25,13 @@ function feature(kind: string, geometry: Geometry, more: { name?: string; height
   return { type: 'Feature', properties: { kind, ...more }, geometry }
 }
 
+/** Names of the buildings that a driver knows by one, in the order of the source. */
+const BUILDING_NAMES: Record<number, { name: string }> = {
+  2: { name: 'fog signal' },
+  3: { name: 'quay' },
+  5: { name: 'hut' },
+}
+
 /** What surrounds the road. `kind` and, where it has one, `name` are a feature's properties; a contour has its `height`. */
 export function marramHeadGround(): FeatureCollection {
   const { ground, corners } = source
@@ -32,7 +39,7 @@ export function marramHeadGround(): FeatureCollection {
   return {
     type: 'FeatureCollection',
     features: [
-      feature('coast', line(ground.coast)),
+      feature('coast', line(ground.coast), { name: 'Marram Bay' }),
       feature('inlet', line(ground.inlet), { name: 'Marram Inlet' }),
       feature('marsh', polygon(ground.marsh), { name: 'Salt marsh' }),
       ...ground.contours.map(({ height, rings }) =>
@@ -41,14 +48,14 @@ export function marramHeadGround(): FeatureCollection {
       ...ground.gravel.map(({ corner, ring }) =>
         feature('gravel', polygon(ring), { name: `${nameOf.get(corner)} gravel` }),
       ),
-      feature('paddock', polygon(ground.paddock), { name: 'Paddock' }),
+      feature('paddock', polygon(ground.paddock), { name: 'Pits and paddock' }),
       feature('pit-lane', line(ground.pitLane), { name: 'Pit lane' }),
       feature('pit-building', polygon(ground.pitBuilding), { name: 'Pit building' }),
       feature('grandstand', polygon(ground.grandstand), { name: 'Grandstand' }),
       feature('lane', line(ground.lane), { name: 'Marram Lane' }),
       feature('breakwater', line(ground.breakwater), { name: 'Breakwater' }),
       ...ground.groynes.map((points) => feature('groyne', line(points))),
-      ...ground.buildings.map((points) => feature('building', polygon(points))),
+      ...ground.buildings.map((points, at) => feature('building', polygon(points), BUILDING_NAMES[at])),
       feature('mast', { type: 'Point', coordinates: [...toLngLat(ground.mast)] }, { name: 'Mast' }),
     ],
   }
