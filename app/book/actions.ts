@@ -18,6 +18,7 @@ export const ACTIONS = [
   'mark.add',
   'mark.change',
   'finding.add',
+  'finding.add-for-another',
   'proposal.decide',
   'circuit.read',
   'circuit.change',

@@ -23,6 +23,7 @@ export const MATRIX: Record<Action, Record<Role, Grant>> = {
   'mark.add': everyone,
   'mark.change': ownForDrivers,
   'finding.add': everyone,
+  'finding.add-for-another': desk,
   'proposal.decide': desk,
   'circuit.read': everyone,
   'circuit.change': desk,

@@ -38,6 +38,15 @@ describe('who may what', () => {
     expect(may(as('driver'), 'mark.change', { madeBy: ids.coach })).toEqual({ ok: false, reason: 'another-persons' })
   })
 
+  it('lets only the desk say what another found', () => {
+    const answers = ROLES.map((role) => [role, may(as(role), 'finding.add-for-another')])
+    expect(Object.fromEntries(answers)).toEqual({
+      manager: { ok: true },
+      coach: { ok: true },
+      driver: { ok: false, reason: 'role' },
+    })
+  })
+
   it('lets nobody change an archived book', () => {
     const writes: Action[] = ACTIONS.filter((action) => !READS.has(action) && action !== 'book.archive')
     for (const role of ROLES)

@@ -1,6 +1,6 @@
 import { and, eq, inArray, isNull } from 'drizzle-orm'
 import * as z from 'zod/mini'
-import type { Actor } from '~/book/actions'
+import type { Action, Actor } from '~/book/actions'
 import { type FindingEntry, findingSchema } from '~/book/finding'
 import type { BookId, ConditionId, FindingId, MarkId, PersonId, TeamId } from '~/book/ids'
 import { may } from '~/book/may'
@@ -23,7 +23,7 @@ const invalid = (problems: readonly Problem[]): JournalOutcome => ({ kind: 'inva
 
 /**
  * Adds what the actor found, all of it or nothing. Sending the same finding again adds nothing; the same id with another content
- * is refused. A finding moves no mark.
+ * is refused. A finding moves no mark. A driver says what he saw and drove himself, and tells others; the desk speaks for others too.
  * @param inputs findings as they came, unchecked; see `findingSchema`
  */
 export async function addFindings(db: Db, actor: Actor, inputs: readonly unknown[]): Promise<JournalOutcome> {
@@ -56,7 +56,7 @@ async function addAll(db: Db, actor: Actor, member: Member, entries: FindingEntr
   for (const [at, entry] of entries.entries()) {
     const mark = known.get(entry.mark)
     if (!mark) return { kind: 'not-found' }
-    const answer = may(actor, 'finding.add', { archived: mark.archived })
+    const answer = may(actor, actionOf(entry, member), { archived: mark.archived })
     if (!answer.ok) return { kind: 'refused', reason: answer.reason }
     if (Math.abs(entry.along) > 2 * mark.length) problems.push({ field: `${at}.along`, code: 'out-of-range' })
     rows.push(rowOf(entry, member, mark))
@@ -64,6 +64,10 @@ async function addAll(db: Db, actor: Actor, member: Member, entries: FindingEntr
   problems.push(...(await strangers(db, member.team, entries)), ...(await conditionsElsewhere(db, member.team, rows)))
   return problems.length > 0 ? invalid(problems) : insert(db, member.team, rows)
 }
+
+/** What one driver tells another is told; what another saw or drove, or that he lost his reference, is his own to say. */
+const actionOf = ({ person, proof, verdict }: FindingEntry, member: Member): Action =>
+  person === member.person || (proof === 'told' && verdict !== 'gone') ? 'finding.add' : 'finding.add-for-another'
 
 interface KnownMark {
   book: BookId

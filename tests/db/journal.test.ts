@@ -50,9 +50,35 @@ describe('a finding', () => {
   test('proves a place for one person in one condition, and moves no mark', async () => {
     const mark = await addMark()
     const further = finding(mark, { along: 120.6, verdict: 'moved' })
-    expect(await addFindings(db, book.team.second, [further])).toEqual({ kind: 'added', added: 1 })
-    expect(await proofOf(mark)).toEqual([['seen', book.team.second.person]])
+    expect(await addFindings(db, book.team.coach, [further])).toEqual({ kind: 'added', added: 1 })
+    expect(await proofOf(mark)).toEqual([['seen', book.team.coach.person]])
     expect((await markOf(book, mark))?.real?.stored.along).toBe(120)
+  })
+
+  test.each([
+    ['driven', 'kept'],
+    ['seen', 'moved'],
+    ['told', 'gone'],
+  ])(
+    'of another, %s and %s, is the desk’s to add; from a driver nothing that came with it is kept',
+    async (proof, verdict) => {
+      const mark = await addMark()
+      const own = finding(mark, { person: book.team.second.person, proof: 'driven' })
+      const others = finding(mark, { proof, verdict })
+      expect(await addFindings(db, book.team.second, [own, others])).toEqual({ kind: 'refused', reason: 'role' })
+      expect(await proofOf(mark)).toEqual([])
+      expect(await addFindings(db, book.team.second, [own])).toEqual({ kind: 'added', added: 1 })
+      expect(await addFindings(db, book.team.manager, [others])).toEqual({ kind: 'added', added: 1 })
+    },
+  )
+
+  test('that one driver tells another is told', async () => {
+    const mark = await addMark()
+    expect(await addFindings(db, book.team.second, [finding(mark, { proof: 'told' })])).toEqual({
+      kind: 'added',
+      added: 1,
+    })
+    expect(await proofOf(mark)).toEqual([['told', book.team.second.person]])
   })
 
   test('sent twice is kept once, also at the same moment', async () => {
@@ -81,7 +107,7 @@ describe('a finding', () => {
   test('names people of the team and conditions of the book', async () => {
     const mark = await addMark()
     const sent = [finding(mark, { person: other.team.driver.person }), finding(mark, { condition: other.dry })]
-    expect(await addFindings(db, book.team.driver, sent)).toEqual({
+    expect(await addFindings(db, book.team.coach, sent)).toEqual({
       kind: 'invalid',
       problems: [
         { field: '0.person', code: 'not-found' },
