@@ -145,7 +145,7 @@ export const FIXED_FIELDS: Record<TargetKind, readonly string[]> = {
   book: [],
   condition: ['kind'],
   card: ['cornerId'],
-  mark: ['cardId', 'kind'],
+  mark: ['kind'],
   layout: [],
   corner: [],
   landmark: ['kind'],

@@ -96,6 +96,7 @@ const FIELDS: Record<string, string> = {
   forPerson: 'whose it is',
   role: 'role',
   conditionId: 'condition',
+  cardId: 'corner',
 }
 
 const NUMBERS: Record<string, (value: number) => string> = {

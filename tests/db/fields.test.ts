@@ -48,8 +48,6 @@ describe('a field', () => {
   test('that is fixed keeps its first value', async () => {
     const id = newMark()
     expectKind(await apply(addsMark(book, id)), 'applied')
-    const moved = operation(book.scope, 'mark', id, { cardId: [book.cards[0], book.cards[1]] })
-    expect(await problemsOf(moved)).toEqual([{ field: 'cardId', code: 'fixed' }])
     const kind = operation(book.scope, 'mark', id, { kind: ['brake', 'lift'] })
     expect(await problemsOf(kind)).toEqual([{ field: 'kind', code: 'fixed' }])
   })

@@ -1,3 +1,4 @@
+import { sql } from 'drizzle-orm'
 import { beforeAll, describe, expect, test } from 'vitest'
 import { applyBatch, applyOperation } from '~/db/apply.server'
 import { readChanges } from '~/db/read-changes.server'
@@ -9,6 +10,7 @@ import {
   bookOf,
   db,
   expectKind,
+  inLine,
   makeTeam,
   makeTeamBook,
   markOf,
@@ -218,24 +220,105 @@ describe('a landmark', () => {
     expect([again?.real?.station, again?.sim?.station]).toEqual([398, 409])
   })
 
-  test('that is dropped cannot be tied to, and a mark tied meanwhile is freed or refused, never lost', async () => {
+  const bookRow = () => sql`select from books where id = ${book.id} for update`
+
+  test('that is dropped cannot be tied to', async () => {
     const { landmark } = await tiedMark(500)
     const drop = operation(book.layoutScope, 'landmark', landmark, { state: ['live', 'dropped'] })
-    const ids = [newMark(), newMark(), newMark()]
-    const outcomes = await Promise.all([
-      ...ids.map((id) =>
-        applyOperation(db, book.team.driver, addsMark(book, id, { real: place(501, 3, tieTo(landmark, 1)) })),
-      ),
-      applyOperation(db, book.team.coach, drop),
+    const ties = addsMark(book, newMark(), { real: place(501, 3, tieTo(landmark, 1)) })
+    const [dropped, tied] = await inLine(bookRow(), [
+      () => applyOperation(db, book.team.coach, drop),
+      () => applyOperation(db, book.team.driver, ties),
     ])
-    expectKind(outcomes[3]!, 'applied')
-    for (const [at, id] of ids.entries()) {
-      const mark = await markOf(book, id)
-      if (outcomes[at]!.kind === 'applied')
-        expect(mark?.real?.stored).toMatchObject({ along: 501, tie: { landmarkId: null } })
-      else expect(outcomes[at]).toMatchObject({ kind: 'invalid', problems: [{ field: 'real', code: 'not-found' }] })
+    expectKind(dropped!, 'applied')
+    expect(tied).toEqual({ kind: 'invalid', problems: [{ field: 'real', code: 'not-found' }] })
+  })
+
+  test('that is dropped right after something was tied to it frees that too', async () => {
+    const { landmark } = await tiedMark(600)
+    const drop = operation(book.layoutScope, 'landmark', landmark, { state: ['live', 'dropped'] })
+    const id = newMark()
+    const outcomes = await inLine(bookRow(), [
+      () => applyOperation(db, book.team.driver, addsMark(book, id, { real: place(601, 3, tieTo(landmark, 1)) })),
+      () => applyOperation(db, book.team.coach, drop),
+    ])
+    expect(outcomes.map(({ kind }) => kind)).toEqual(['applied', 'applied'])
+    expect((await markOf(book, id))?.real?.stored).toMatchObject({ along: 601, tie: { landmarkId: null } })
+  })
+
+  test('of one’s own that moves while another ties a mark to it waits, and is a proposal then', async () => {
+    const landmark = newLandmark()
+    expectKind(await applyOperation(db, book.team.driver, addsLandmark(book, landmark, 800)), 'applied')
+    const moved = operation(book.layoutScope, 'landmark', landmark, { real: [stored(800), stored(790)] })
+    const ties = addsMark(book, newMark(), { real: place(803, 3, tieTo(landmark, 3)) })
+    const outcomes = await inLine(bookRow(), [
+      () => applyOperation(db, book.team.second, ties),
+      () => applyOperation(db, book.team.driver, moved),
+    ])
+    expect(outcomes.map(({ kind }) => kind)).toEqual(['applied', 'proposed'])
+  })
+})
+
+describe('a mark moved to another card', () => {
+  const moves = (id: string, [from, to]: readonly [string, string]) =>
+    operation(book.scope, 'mark', id, { cardId: [from, to] })
+  const cardOf = async (id: string) => {
+    const view = await bookOf(book.team, book.slug)
+    return view.corners.find(({ marks }) => marks.some((mark) => mark.id === id))?.card.id
+  }
+
+  test('is read there, and back where it was once undone', async () => {
+    const id = await addMark()
+    const sent = moves(id, book.cards)
+    expectKind(await applyOperation(db, book.team.coach, sent), 'applied')
+    expect(await cardOf(id)).toBe(book.cards[1])
+    expectKind(await undoOperation(db, book.team.coach, book.scope, sent.id), 'applied')
+    expect(await cardOf(id)).toBe(book.cards[0])
+  })
+
+  test('must find a card of its own book', async () => {
+    const other = await makeTeamBook(book.team)
+    const id = await addMark()
+    for (const card of [other.cards[0], newMark()])
+      expect(await applyOperation(db, book.team.coach, moves(id, [book.cards[0], card]))).toEqual({
+        kind: 'invalid',
+        problems: [{ field: 'cardId', code: 'not-found' }],
+      })
+    expect(await cardOf(id)).toBe(book.cards[0])
+  })
+
+  test('by a driver who did not make it is a proposal', async () => {
+    const id = await addMark()
+    expect((await applyOperation(db, book.team.driver, moves(id, book.cards))).kind).toBe('proposed')
+  })
+
+  test('lets its corner be merged into the other, in one batch that is undone in one', async () => {
+    const team = await makeTeam()
+    const own = await makeTeamBook(team)
+    const id = newMark()
+    expectKind(await applyOperation(db, team.driver, addsMark(own, id, { gear: 3 })), 'applied')
+    const [gone, kept] = own.corners
+    const merge = operation(own.layoutScope, 'corner', gone!.id, {
+      state: ['live', 'merged'],
+      mergedInto: [null, kept!.id],
+    })
+    const move = operation(own.scope, 'mark', id, { cardId: [own.cards[0], own.cards[1]] })
+    expect(await applyBatch(db, team.coach, [merge, move])).toMatchObject({
+      kind: 'stopped',
+      outcome: { kind: 'invalid', problems: [{ field: 'state', code: 'in-use' }] },
+    })
+
+    const merged = await applyBatch(db, team.coach, [move, merge])
+    if (merged.kind !== 'applied') throw new Error(JSON.stringify(merged))
+    const read = async () => {
+      const { corners } = await bookOf(team, own.slug)
+      return corners.map(({ number, marks }) => [number, marks.map((mark) => mark.id)])
     }
-    const late = addsMark(book, newMark(), { real: place(501, 3, tieTo(landmark, 1)) })
-    expect((await applyOperation(db, book.team.driver, late)).kind).toBe('invalid')
+    expect(await read()).toEqual([['2', [id]]])
+    expect(await undoBatch(db, team.coach, merged.batch)).toMatchObject({ kind: 'applied' })
+    expect(await read()).toEqual([
+      ['1', [id]],
+      ['2', []],
+    ])
   })
 })

@@ -72,7 +72,7 @@ const member: Check = async ({ db, team }, id) =>
       .where(and(eq(memberships.teamId, team), eq(memberships.personId, id as PersonId), isNull(memberships.endedAt))),
   )
 
-/** Dropping a landmark locks the books of its layout too: it cannot go while something is being tied to it. */
+/** Dropping or moving a landmark locks the books of its layout too: it stays as it is while something is being tied to it. */
 const tiedLandmark: Check = async ({ db, team, scope }, value) => {
   const id = (value as unknown as Place).tie?.landmarkId
   if (!id) return true

@@ -1,7 +1,7 @@
 import { and, asc, eq, inArray, or } from 'drizzle-orm'
 import type { Actor } from '~/book/actions'
 import type { BookId, LayoutId } from '~/book/ids'
-import type { Operation, Scope } from '~/book/operation'
+import type { Operation, Scope, TargetKind } from '~/book/operation'
 import type { Db } from '../database'
 import { ownTeam } from '../own-team'
 import { books, layouts } from '../schema'
@@ -22,9 +22,14 @@ export interface LockedScope {
 
 export const keyOf = (scope: Scope) => `${scope.kind} ${scope.id}`
 
-/** Whether an operation on a layout reaches into its books: ties are freed, cards are made. */
+/** Fields of a layout's things that reach into its books: ties are freed or move with their landmark, cards are made. */
+const REACHING: Partial<Record<TargetKind, readonly string[]>> = {
+  landmark: ['state', 'sim', 'real'],
+  corner: ['state'],
+}
+
 const reachesBooks = ({ target, set }: Operation) =>
-  (target.kind === 'landmark' || target.kind === 'corner') && set.state !== undefined
+  REACHING[target.kind]?.some((field) => set[field] !== undefined) ?? false
 
 /**
  * Locks the scopes of some operations, always layouts before books and each in the order of their ids, so that two writers
