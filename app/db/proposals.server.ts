@@ -1,12 +1,12 @@
-import { and, asc, eq } from 'drizzle-orm'
+import { and, asc, eq, inArray, or, type SQL, sql } from 'drizzle-orm'
 import type { Actor } from '~/book/actions'
-import type { OperationId, PersonId } from '~/book/ids'
+import type { CardId, OperationId, PersonId } from '~/book/ids'
 import { may } from '~/book/may'
 import type { Operation, Outcome, Scope } from '~/book/operation'
 import { applyAll } from './apply.server'
 import type { Db } from './database'
 import { isBy, ownTeam, personOf } from './own-team'
-import { operations } from './schema'
+import { marks, operations } from './schema'
 
 /** An operation that waits for a coach. */
 export interface Proposal {
@@ -18,8 +18,11 @@ export interface Proposal {
   at: string
 }
 
-/** What waits for a coach, of one scope or of the whole team, oldest first. */
-export async function listProposals(db: Db, actor: Actor, scope: Scope | null): Promise<Proposal[]> {
+/**
+ * What waits for a coach, of one scope or of the whole team, in the order in which it came in.
+ * @param card only what is about this card: itself, its marks, dropped ones too, and marks that would be made on it or moved to it
+ */
+export async function listProposals(db: Db, actor: Actor, scope: Scope | null, card?: CardId): Promise<Proposal[]> {
   const inScope = scope && (scope.kind === 'book' ? eq(operations.bookId, scope.id) : eq(operations.layoutId, scope.id))
   const rows = await db
     .select({
@@ -30,9 +33,29 @@ export async function listProposals(db: Db, actor: Actor, scope: Scope | null): 
       at: operations.createdAt,
     })
     .from(operations)
-    .where(and(ownTeam(actor, operations.teamId), eq(operations.status, 'proposed'), inScope ?? undefined))
+    .where(
+      and(
+        ownTeam(actor, operations.teamId),
+        eq(operations.status, 'proposed'),
+        inScope ?? undefined,
+        card && aboutCard(db, actor, card),
+      ),
+    )
     .orderBy(asc(operations.arrival))
   return rows.map((row) => ({ ...row, at: row.at.toISOString() }))
+}
+
+function aboutCard(db: Db, actor: Actor, card: CardId): SQL | undefined {
+  const target = sql`(${operations.body} #>> '{target,id}')::uuid`
+  const itsMarks = db
+    .select({ id: sql<string>`${marks.id}` })
+    .from(marks)
+    .where(and(ownTeam(actor, marks.teamId), eq(marks.cardId, card)))
+  return or(
+    eq(target, card),
+    inArray(target, itsMarks),
+    eq(sql`(${operations.body} #>> '{set,cardId,to}')::uuid`, card),
+  )
 }
 
 /**

@@ -4,7 +4,7 @@ import type { BookId, CardId, LayoutId, OperationId, PersonId } from '~/book/ids
 import type { FieldChange, TargetKind } from '~/book/operation'
 import type { Db } from './database'
 import { ownTeam } from './own-team'
-import { changes, marks } from './schema'
+import { changes, landmarks, marks, stretches } from './schema'
 
 /** One line of the change log. */
 export interface Change {
@@ -20,6 +20,8 @@ export interface Change {
   undoes: OperationId | null
   batch: string | null
   by: PersonId | null
+  /** Whose thing was changed: the maker of the mark, landmark or stretch, dropped or not; null for what has no maker. */
+  madeBy: PersonId | null
   acceptedBy: PersonId | null
   /** Instants, ISO 8601: when it was made, when it was written. */
   madeAt: string
@@ -52,11 +54,15 @@ export async function readChanges(db: Db, actor: Actor, asked: ChangesAsked): Pr
       undoes: changes.undoes,
       batch: changes.batch,
       by: changes.byId,
+      madeBy: sql<PersonId | null>`coalesce(${marks.madeBy}, ${landmarks.madeBy}, ${stretches.madeBy})`,
       acceptedBy: changes.acceptedBy,
       madeAt: changes.madeAt,
       writtenAt: changes.createdAt,
     })
     .from(changes)
+    .leftJoin(marks, isTarget('mark', marks))
+    .leftJoin(landmarks, isTarget('landmark', landmarks))
+    .leftJoin(stretches, isTarget('stretch', stretches))
     .where(
       and(
         ownTeam(actor, changes.teamId),
@@ -75,6 +81,9 @@ export async function readChanges(db: Db, actor: Actor, asked: ChangesAsked): Pr
     writtenAt: writtenAt.toISOString(),
   }))
 }
+
+const isTarget = (kind: TargetKind, table: typeof marks | typeof landmarks | typeof stretches) =>
+  and(eq(changes.targetKind, kind), eq(table.teamId, changes.teamId), eq(table.id, changes.targetId))
 
 const marksOf = (db: Db, actor: Actor, card: CardId) =>
   db

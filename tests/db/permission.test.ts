@@ -1,7 +1,7 @@
 import { eq, sql } from 'drizzle-orm'
 import { beforeAll, describe, expect, test } from 'vitest'
 import type { Actor } from '~/book/actions'
-import type { OperationId } from '~/book/ids'
+import type { CardId, OperationId } from '~/book/ids'
 import type { Operation } from '~/book/operation'
 import { applyBatch, applyOperation } from '~/db/apply.server'
 import { decideProposal, listProposals } from '~/db/proposals.server'
@@ -222,6 +222,36 @@ describe('what another made', () => {
       expect(waiting).not.toContain(asked.id)
     },
   )
+
+  test('what waits for one card is told: of its marks, dropped ones, new ones, and those moved to it', async () => {
+    const own = await makeTeamBook(await makeTeam())
+    const { coach, driver } = own.team
+    const [live, dropped, elsewhere] = [newMark(), newMark(), newMark()]
+    for (const [id, card] of [
+      [live, own.cards[0]],
+      [dropped, own.cards[0]],
+      [elsewhere, own.cards[1]],
+    ] as const)
+      expectKind(await applyOperation(db, coach, addsMark(own, id, { cardId: card, gear: 3 })), 'applied')
+    const drop = operation(own.scope, 'mark', dropped, { state: ['live', 'dropped'] })
+    expectKind(await applyOperation(db, coach, drop), 'applied')
+    const sent = [
+      operation(own.scope, 'mark', live, { gear: [3, 4] }),
+      operation(own.scope, 'mark', dropped, { state: ['dropped', 'live'] }),
+      addsMark(own, newMark(), { gear: 5 }),
+      operation(own.scope, 'mark', elsewhere, { gear: [3, 2] }),
+      operation(own.scope, 'mark', elsewhere, { cardId: [own.cards[1], own.cards[0]] }),
+      addsMark(own, newMark(), { cardId: own.cards[1], gear: 6 }),
+    ]
+    expect((await applyBatch(db, driver, sent)).kind).toBe('proposed')
+    const about = async (card: string) => {
+      const waiting = await listProposals(db, coach, own.scope, card as CardId)
+      return waiting.map(({ id }) => sent.findIndex((one) => one.id === id))
+    }
+    expect(await about(own.cards[0])).toEqual([0, 1, 2, 4])
+    expect(await about(own.cards[1])).toEqual([3, 4, 5])
+    expect(await listProposals(db, other.team.coach, null, own.cards[0] as CardId)).toEqual([])
+  })
 
   test('moving one’s own landmark to which another’s mark is tied is a proposal; renaming it is not', async () => {
     const landmark = newLandmark()

@@ -1,6 +1,6 @@
 import { beforeAll, describe, expect, test } from 'vitest'
 import type { Operation } from '~/book/operation'
-import { applyBatch } from '~/db/apply.server'
+import { applyBatch, applyOperation } from '~/db/apply.server'
 import { addFindings } from '~/db/journal.server'
 import { readBook } from '~/db/read-book.server'
 import { readBooks } from '~/db/read-books.server'
@@ -14,11 +14,13 @@ import {
   type Book,
   bookOf,
   db,
+  expectKind,
   makeTeam,
   makeTeamBook,
   newId,
   newLandmark,
   newMark,
+  operation,
   place,
   pool,
   tieTo,
@@ -152,6 +154,23 @@ describe('lists', () => {
     const centreline = await readCentreline(db, book.team.coach, circuit!.layout.centreline)
     expect(centreline?.length).toBeCloseTo(circuit!.layout.length, 6)
     expect(await readCentreline(db, book.team.coach, circuit!.layout.centreline)).toBe(centreline)
+  })
+
+  test('the log says whose thing was changed, also of a thing that is gone, and of nobody’s', async () => {
+    const book = await makeTeamBook(await makeTeam())
+    const { coach, driver, second } = book.team
+    const [mark, landmark] = [newMark(), newLandmark()]
+    const sent = [
+      [driver, addsMark(book, mark)],
+      [second, addsLandmark(book, landmark, 90)],
+      [coach, operation(book.scope, 'mark', mark, { state: ['live', 'dropped'] })],
+      [coach, operation(book.layoutScope, 'landmark', landmark, { name: ['White post', 'Old post'] })],
+      [coach, operation(book.scope, 'card', book.cards[0], { line: ['', 'wide in'] })],
+    ] as const
+    for (const [person, change] of sent) expectKind(await applyOperation(db, person, change), 'applied')
+    const log = await readChanges(db, coach, { limit: sent.length })
+    const makers = [null, second.person, driver.person, second.person, driver.person]
+    expect(log.map(({ madeBy }) => madeBy)).toEqual(makers)
   })
 
   test('the log comes in pages, latest first', async () => {
