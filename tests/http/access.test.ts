@@ -38,7 +38,12 @@ const all = (status: number): By => ({
 const TABLE: Record<string, Row> = {
   '/': { path: () => '/', get: all(200) },
   '/health': { path: () => '/health', get: all(200) },
-  '/sign-in': { path: () => '/sign-in', get: { ...all(302), stranger: 200 }, post: all(400) },
+  '/sign-in': {
+    path: () => '/sign-in',
+    // Whoever is signed in already is sent on.
+    get: { ...all(302), stranger: 200 },
+    post: { ...all(302), stranger: 400 },
+  },
   '/sign-out': { path: () => '/sign-out', get: all(302), post: { ...all(302) } },
   '/teams': { path: () => '/teams', get: all(302) },
   '/teams/:team': { path: () => TEAM, get: everyMember },
@@ -51,6 +56,12 @@ const TABLE: Record<string, Row> = {
     post: formOfEveryMember,
   },
   '/teams/:team/books/:book/corners/:number.geojson': { path: () => `${BOOK}/corners/3.geojson`, get: everyMember },
+  '/teams/:team/books/:book/operations': {
+    path: () => `${BOOK}/operations`,
+    // Nothing to read; and a form names no book whose operation it would be.
+    get: { stranger: 302, outsider: 404, driver: 400, coach: 400, manager: 400 },
+    post: { stranger: 302, outsider: 404, driver: 404, coach: 404, manager: 404 },
+  },
   '/teams/:team/circuits': { path: () => `${TEAM}/circuits`, get: everyMember },
   '/teams/:team/circuits/import': { path: () => `${TEAM}/circuits/import`, get: deskOnly, post: formOfDesk },
   '/teams/:team/circuits/import/:draft': {
