@@ -22,6 +22,7 @@ import { requestLog } from '~/middleware/request-log.server'
 import { sameOrigin } from '~/middleware/same-origin.server'
 import { securityHeaders } from '~/middleware/security-headers.server'
 import { staticFiles } from '~/middleware/static-files.server'
+import { wholeAddress } from '~/middleware/whole-address.server'
 
 const production = import.meta.env.PROD
 let draining = false
@@ -61,7 +62,7 @@ app.get('/ready', async (_request, response) => {
 })
 app.use(compression())
 if (production) app.use(staticFiles())
-app.use(sameOrigin(env.PUBLIC_URL), limitBody)
+app.use(wholeAddress, sameOrigin(env.PUBLIC_URL), limitBody)
 app.use(createRequestHandler({ build: pages, getLoadContext: (_request, response) => contextOf(response) }))
 app.use(lastResort(log))
 

@@ -133,6 +133,16 @@ describe('a body', () => {
     expect(answer.text).toMatch('The form did not arrive whole.')
   })
 
+  it.each(['email[30000000]=a', '__proto__.email=a', '__state__={', `email=a${'&email=a'.repeat(2500)}`])(
+    'of fields that no page sends is a wrong request: %.20s',
+    async (body) => {
+      const answer = await send('/sign-in', { method: 'POST', headers: fromHere, body })
+      expect(answer.status).toBe(400)
+      expect(answer.text).toMatch('The form did not arrive whole.')
+      expect(answer.text.length).toBeLessThan(20_000)
+    },
+  )
+
   it('that nobody reads does not hold up the next request on its connection', async () => {
     const agent = new Agent({ keepAlive: true, maxSockets: 1 })
     const large = { method: 'POST', headers: fromHere, body: Buffer.alloc(900_000, 'a'), agent }
@@ -177,10 +187,8 @@ describe('a page', () => {
     expect((await send('/no-such-page', { headers: person })).headers['cache-control']).toBe('no-store')
   })
 
-  it('that does not exist says so without a trace of code', async () => {
-    const { status, text } = await send('/no-such-page', { headers: person })
-    expect(status).toBe(404)
-    expect(text).not.toMatch(/\bat .+\.(js|ts|tsx):\d+|node_modules/)
+  it('that does not exist says so', async () => {
+    expect((await send('/no-such-page', { headers: person })).status).toBe(404)
   })
 
   it('is sent compressed where the reader takes it', async () => {
@@ -192,11 +200,35 @@ describe('a page', () => {
   it('at a broken address is a wrong request, not a broken server', async () => {
     expect((await send('/%c0%af')).status).toBeLessThan(500)
     expect((await send('/', { headers: { Host: 'a b' } })).status).toBe(400)
+    for (const path of ['/teams/%00', '/teams/a%00.data', '/sign-in?next=%00']) {
+      expect((await send(path, { headers: person })).status, path).toBe(400)
+    }
   })
 
   it('answers HEAD as GET without the page', async () => {
     const { status, text, headers } = await send('/', { method: 'HEAD', headers: person })
     expect({ status, text }).toEqual({ status: 200, text: '' })
     expect(headers['content-type']).toMatch('text/html')
+  })
+})
+
+describe('no refusal shows a trace of code', () => {
+  const large = Buffer.alloc(1_000_001, 'a')
+  const json = { Origin: baseUrl, 'Content-Type': 'application/json' }
+  it.each([
+    ['a page that is missing', 404, '/no-such-page', { headers: person }],
+    ['its data', 404, '/no-such-page.data', { headers: person }],
+    ['a file that is missing', 404, '/assets/none.js', {}],
+    ['a broken address', 400, '/teams/%00', { headers: person }],
+    ['a form from elsewhere', 403, '/sign-in', { method: 'POST', body: 'a=1' }],
+    ['a body too large', 413, '/sign-in', { method: 'POST', headers: fromHere, body: large }],
+    ['a form that is none', 400, '/sign-in', { method: 'POST', headers: json, body: '{' }],
+    ['the same for its data', 400, '/sign-in.data', { method: 'POST', headers: json, body: '{' }],
+    ['a page that takes no form', 405, '/', { method: 'POST', headers: fromHere, body: 'a=1' }],
+    ['a method that nobody knows', 405, '/sign-in', { method: 'PROPFIND', headers: fromHere }],
+  ])('%s', async (_what, status, path, request) => {
+    const answer = await send(path, request)
+    expect(answer.status).toBe(status)
+    expect(answer.text).not.toMatch(/\bat .+\.(js|ts|tsx):\d+|node_modules|file:\/\//)
   })
 })
