@@ -48,20 +48,17 @@ export interface ProposalData {
 
 type PersonActor = Extract<Actor, { kind: 'person' }>
 
+type Logged = LoggedChange & { madeBy: PersonId | null }
+
 /** Lines of the change log as this person may take them back. */
-export function changeData(
-  actor: PersonActor,
-  view: BookView,
-  cut: CornerCut,
-  logged: readonly LoggedChange[],
-): ChangeData[] {
-  const makers = new Map<string, PersonId>(cut.corner.marks.map((mark) => [mark.id, mark.madeBy]))
+export function changeData(actor: PersonActor, view: BookView, logged: readonly Logged[]): ChangeData[] {
   const lines = new Map(logged.map((change) => [change.operation, change]))
   return tellChanges(logged, view).map((told) => {
     const line = lines.get(told.operation)
-    const madeBy = makers.get(line?.target.id ?? '') ?? told.by
+    const action = line?.target.kind === 'card' ? 'card.change' : 'mark.change'
+    const facts = { archived: view.book.archived, madeBy: line?.madeBy ?? null }
     // What was made together is taken back together, and may reach beyond this corner: not from here.
-    const mayUndo = !line?.batch && may(actor, 'mark.change', { archived: view.book.archived, madeBy }).ok
+    const mayUndo = !line?.batch && may(actor, action, facts).ok
     return { operation: told.operation, by: told.by, words: changeWords(told), mayUndo }
   })
 }
@@ -73,19 +70,16 @@ interface Waiting {
 }
 
 /** What waits for the coach in this corner. */
-export function proposalData(view: BookView, cut: CornerCut, waiting: readonly Waiting[]): ProposalData[] {
-  const here = new Set<string>([cut.corner.card.id, ...cut.corner.marks.map((mark) => mark.id)])
-  const logged = waiting
-    .filter(({ operation }) => here.has(operation.target.id))
-    .map(({ id, by, operation }) => ({
-      operation: id,
-      target: operation.target,
-      set: operation.set,
-      reason: operation.reason ?? null,
-      undoes: operation.undoes ?? null,
-      batch: null,
-      by,
-    }))
+export function proposalData(view: BookView, waiting: readonly Waiting[]): ProposalData[] {
+  const logged = waiting.map(({ id, by, operation }) => ({
+    operation: id,
+    target: operation.target,
+    set: operation.set,
+    reason: operation.reason ?? null,
+    undoes: operation.undoes ?? null,
+    batch: null,
+    by,
+  }))
   return tellChanges(logged, view).map((told) => ({ id: told.operation, by: told.by, words: changeWords(told) }))
 }
 

@@ -48,7 +48,7 @@ export async function loader({ request, context, params, url }: Route.LoaderArgs
     layOutGeometry(context, actor, view.layout),
     readNames(db, actor),
     readChanges(db, actor, { book: view.book.id, card: cut.corner.card.id, limit: 12 }),
-    listProposals(db, actor, scope),
+    listProposals(db, actor, scope, cut.corner.card.id),
   ])
   return cornerPageData({
     team: team.slug,
@@ -56,8 +56,8 @@ export async function loader({ request, context, params, url }: Route.LoaderArgs
     actor,
     frame,
     names: Object.fromEntries(names),
-    changes: changeData(actor, view, cut, changes),
-    proposals: proposalData(view, cut, proposals),
+    changes: changeData(actor, view, changes),
+    proposals: proposalData(view, proposals),
     ...lookAt(view.conditions, {
       condition: url.searchParams.get('condition'),
       show: url.searchParams.get('show'),
