@@ -14,7 +14,7 @@ const CONTROLS = /(?![\t\n\r])\p{Cc}/gu
  * a list takes up grows with the places that its names count, not with what was sent; hence the limits. Null where a name is
  * of no such form, goes deeper than the pages' own or means what every object has, or where fields or places are too many.
  */
-export function formFields(sent: FormData): FormData | null {
+export function formFields(sent: FormData | URLSearchParams): FormData | null {
   const fields = new FormData()
   const lists = new Map<string, number>()
   let count = 0

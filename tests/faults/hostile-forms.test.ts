@@ -31,6 +31,7 @@ const refused: Record<string, string> = {
   'lists in lists': names(2000, (i) => `corners[${i % 500}].corners[499]`),
   'places, many': `corners[${MOST_PLACES}].name=a`,
   'fields, many': names(MOST_FIELDS + 1, () => 'email'),
+  'nothing but separators': '&'.repeat(1_000_000),
   depth: `email${'[0]'.repeat(100_000)}=a`,
   'one long name': `${'a'.repeat(900_000)}=a`,
   'the parent of all objects': '__proto__.email=a',
