@@ -1,5 +1,5 @@
 import { type LapFrame, wrap } from '~/track/lap-frame'
-import { type Offset, offset, type Station, station } from '~/track/units'
+import { type Offset, offset, type Station, station, toMillimetre } from '~/track/units'
 import type { CardId, ConditionId, MarkId, OperationId, PersonId } from './ids'
 import type { BrakeRole, Ground, Manner, MarkKind } from './kinds'
 import type { FieldChange, Json, Operation, Scope } from './operation'
@@ -126,17 +126,14 @@ function storedPlace(at: GivenPlace, tie: Place['tie'], frame: LapFrame) {
 }
 
 const samePlace = (seen: Place | null, to: { along: number; across: number }) =>
-  seen !== null && millimetre(seen.along) === to.along && millimetre(seen.across) === to.across
-
-/** Metres to the millimetre: what the write path stores, so that the next `from` equals it. */
-const millimetre = (value: number) => Math.round(value * 1000) / 1000 + 0
+  seen !== null && toMillimetre(seen.along) === to.along && toMillimetre(seen.across) === to.across
 
 type StoredPlace = { along: number; across: number; tie: Json }
 
 function asJson(place: Place): StoredPlace
 function asJson(place: Place | null): StoredPlace | null
 function asJson(place: Place | null): StoredPlace | null {
-  return place && { along: millimetre(place.along), across: millimetre(place.across), tie: place.tie as Json }
+  return place && { along: toMillimetre(place.along), across: toMillimetre(place.across), tie: place.tie as Json }
 }
 
 function fromNothing(fields: Record<string, Json>): Record<string, FieldChange> {

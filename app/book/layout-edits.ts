@@ -1,4 +1,4 @@
-import type { Along } from '~/track/units'
+import { type Along, toMillimetre } from '~/track/units'
 import type { LayoutId, OperationId } from './ids'
 import { type FieldChange, OPERATION_VERSION, type Operation } from './operation'
 
@@ -43,13 +43,10 @@ export function renameCorners(making: Making, corners: readonly TypedCorner[]): 
 export const reverseLayout = (making: Making, seenReversed: boolean): Operation =>
   operation(making, { kind: 'layout', id: making.layout }, { reversed: { from: seenReversed, to: !seenReversed } })
 
-/** Metres to the millimetre: what the write path stores, so that the next `from` equals it. */
-const millimetre = (value: number) => Math.round(value * 1000) / 1000 + 0
-
 /** The start line put elsewhere on the drawn line. */
 export const moveStart = (making: Making, seenStart: Along, to: Along): Operation =>
   operation(
     making,
     { kind: 'layout', id: making.layout },
-    { startAlong: { from: millimetre(seenStart), to: millimetre(to) } },
+    { startAlong: { from: toMillimetre(seenStart), to: toMillimetre(to) } },
   )

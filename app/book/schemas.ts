@@ -1,4 +1,5 @@
 import * as z from 'zod/mini'
+import { toMillimetre } from '~/track/units'
 import {
   BRAKE_ROLES,
   CONDITION_KINDS,
@@ -17,10 +18,11 @@ const METRES_LIMIT = 40_000
 const SPEED_LIMIT = 150
 
 /** Metres rounded to 1 mm, so that two devices that mean the same place say the same number. */
-const length = z.pipe(
+export const lengthSchema = z.pipe(
   z.number().check(z.gte(-METRES_LIMIT), z.lte(METRES_LIMIT)),
-  z.transform((value: number) => Math.round(value * 1000) / 1000 || 0),
+  z.transform(toMillimetre),
 )
+const length = lengthSchema
 /** Speed in m/s on the grid of 0.1 km/h. */
 const speed = z.pipe(
   z.number().check(z.gte(0), z.lte(SPEED_LIMIT)),

@@ -1,6 +1,7 @@
 import { and, asc, eq } from 'drizzle-orm'
 import type { Actor } from '~/book/actions'
 import type { CarId } from '~/book/ids'
+import { CAR_LENGTH, CAR_WIDTH, EYE_HEIGHT } from '~/book/limits'
 import { nameProblems, type Problem, rangeProblems } from './checks'
 import { commander, type Declined } from './command'
 import type { Db } from './database'
@@ -26,16 +27,12 @@ export function readCars(db: Db, actor: Actor): Promise<Car[]> {
     .orderBy(asc(cars.name), asc(cars.id))
 }
 
-/** Metres that a car may measure: the least and the most. */
-const MEASURES = { length: [1, 10], width: [0.5, 4], eyeHeight: [0.2, 3] } as const
-
 function problemsOf(car: Car): Problem[] {
-  const { length, width, eyeHeight } = MEASURES
   return [
     ...nameProblems('name', car.name),
-    ...rangeProblems('length', car.length, ...length),
-    ...rangeProblems('width', car.width, ...width),
-    ...rangeProblems('eyeHeight', car.eyeHeight, ...eyeHeight),
+    ...rangeProblems('length', car.length, CAR_LENGTH),
+    ...rangeProblems('width', car.width, CAR_WIDTH),
+    ...rangeProblems('eyeHeight', car.eyeHeight, EYE_HEIGHT),
   ]
 }
 

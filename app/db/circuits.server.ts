@@ -3,16 +3,17 @@ import type { FeatureCollection } from 'geojson'
 import type { Actor } from '~/book/actions'
 import type { CircuitId, CornerId, GeometryHash, LayoutId, TeamId } from '~/book/ids'
 import type { TurnDirection } from '~/book/kinds'
+import { ROAD_WIDTH } from '~/book/limits'
 import { type Json, OPERATION_VERSION, type Operation } from '~/book/operation'
 import type { Datum } from '~/book/place'
 import { makeCentreline } from '~/track/centreline'
 import { wrap } from '~/track/lap-frame'
 import { outlineOf } from '~/track/outline'
-import type { Position } from '~/track/units'
+import { type Position, toMillimetre } from '~/track/units'
 import { newId } from './apply/new-id'
 import { applyAll } from './apply.server'
 import { canonicalJson, sha256 } from './canonical'
-import { nameProblems, type Problem, ROAD_WIDTH, rangeProblems, zoneProblems } from './checks'
+import { nameProblems, type Problem, rangeProblems, zoneProblems } from './checks'
 import { commander, type Declined, lockTeam, type Member } from './command'
 import type { Db } from './database'
 import { centrelines, circuits, grounds, layouts } from './schema'
@@ -61,9 +62,9 @@ function problemsOf({ circuit, layout, positions, ground }: NewCircuit): Problem
     ...nameProblems('circuit.name', circuit.name),
     ...zoneProblems('circuit.timeZone', circuit.timeZone),
     ...nameProblems('layout.name', layout.name),
-    ...rangeProblems('layout.roadWidth', layout.roadWidth, ...ROAD_WIDTH),
+    ...rangeProblems('layout.roadWidth', layout.roadWidth, ROAD_WIDTH),
     ...(isLine ? [] : [{ field: 'positions', code: 'invalid' as const }]),
-    ...(isLine ? rangeProblems('layout.startAlong', layout.startAlong, 0, makeCentreline(positions).length) : []),
+    ...(isLine ? rangeProblems('layout.startAlong', layout.startAlong, [0, makeCentreline(positions).length]) : []),
     ...(isStorable(ground) ? [] : [{ field: 'ground', code: 'invalid' as const }]),
   ]
 }
@@ -119,15 +120,13 @@ async function addLayout(db: Db, { team, person }: Member, { circuit, layout, po
     name: layout.name.trim(),
     centrelineHash: hash,
     groundHash: ground && (await storeGround(db, team, ground)),
-    startAlong: wrap(millimetres(layout.startAlong), length),
+    startAlong: wrap(toMillimetre(layout.startAlong), length),
     reversed: layout.reversed,
-    roadWidth: millimetres(layout.roadWidth),
+    roadWidth: toMillimetre(layout.roadWidth),
     length,
     madeBy: person,
   })
 }
-
-const millimetres = (value: number) => Math.round(value * 1000) / 1000 + 0
 
 /** JSON of stored numbers has no −0, and neither may the text that names them. */
 const withoutMinusZero = (positions: readonly Position[]) =>

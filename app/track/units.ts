@@ -44,3 +44,6 @@ export const offset = (value: number) => value as Offset
 export const fromKmh = (kmh: number) => metresPerSecond(kmh / 3.6)
 /** Speed in km/h from m/s. */
 export const toKmh = (speed: MetresPerSecond) => speed * 3.6
+
+/** Metres to the millimetre, as they are stored and compared; never −0. */
+export const toMillimetre = (value: number) => Math.round(value * 1000) / 1000 + 0

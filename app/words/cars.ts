@@ -1,4 +1,5 @@
-import { NBSP } from './measures'
+import { CAR_LENGTH, CAR_WIDTH, EYE_HEIGHT } from '~/book/limits'
+import { formatLimits } from './measures'
 
 /** A team's cars: what a book needs to know of one. */
 export const carWords = {
@@ -22,7 +23,7 @@ export const carWords = {
   nameMissing: 'What does the team call it?',
   missing: 'Give it in metres.',
   wrong: 'A number in metres, such as 4.6.',
-  lengthOutside: `Cars are 2 to 8${NBSP}m long.`,
-  widthOutside: `Cars are 1 to 3${NBSP}m wide.`,
-  eyeOutside: `An eye sits 0.4 to 2.5${NBSP}m over the road.`,
+  lengthOutside: `Cars are ${formatLimits(CAR_LENGTH)} long.`,
+  widthOutside: `Cars are ${formatLimits(CAR_WIDTH)} wide.`,
+  eyeOutside: `An eye sits ${formatLimits(EYE_HEIGHT)} over the road.`,
 } as const

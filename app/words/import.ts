@@ -1,5 +1,6 @@
+import { ROAD_WIDTH } from '~/book/limits'
 import type { Metres, Seconds } from '~/track/units'
-import { formatKilometres, formatNumber, formatSeconds, NBSP } from './measures'
+import { formatKilometres, formatLimits, formatNumber, formatSeconds, NBSP } from './measures'
 
 /** Seconds as a lap time: "58.3 s", "1:32.4". */
 export function lapTime(value: Seconds): string {
@@ -72,7 +73,7 @@ export const importWords = {
   roadWidth: 'Road width, m',
   roadWidthHint: 'From edge to edge, where most of the lap is as wide.',
   roadWidthMissing: 'Give it in metres; 12 is usual.',
-  roadWidthOutside: `Roads are 4 to 40${NBSP}m wide.`,
+  roadWidthOutside: `Roads are ${formatLimits(ROAD_WIDTH)} wide.`,
   save: 'Keep the circuit',
   again: 'Bring another file',
   datum: 'from the tightest point',

@@ -1,3 +1,4 @@
+import type { Limits } from '~/book/limits'
 import type { Degrees, Metres, MetresPerSecond, Seconds } from '~/track/units'
 import { toKmh } from '~/track/units'
 
@@ -28,6 +29,9 @@ export function formatNumber(value: number, decimals = 0): string {
 function withUnit(value: number, unit: string, decimals: number): string {
   return `${formatNumber(value, decimals)}${NBSP}${unit}`
 }
+
+/** The least and the most that something measures: "0.4 to 2.5 m". */
+export const formatLimits = ([least, most]: Limits): string => `${least} to ${most}${NBSP}m`
 
 /** "113 m", "1 240 m". Whole metres unless told otherwise. */
 export const formatMetres = (value: Metres, decimals = 0): string => withUnit(value, 'm', decimals)

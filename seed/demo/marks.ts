@@ -1,6 +1,6 @@
 import type { Ground } from '~/book/kinds'
 import type { Place, Placement, Tie } from '~/book/place'
-import type { Along } from '~/track/units'
+import { type Along, toMillimetre } from '~/track/units'
 import { instantOf } from './dates'
 import type { DemoLandmark } from './landmarks'
 import { acrossOf, alongAt, roadAhead, roadGap } from './road'
@@ -103,7 +103,7 @@ function demoTie({ tie }: SourceMark, along: Along, landmark: DemoLandmark | nul
 /** The metres along a landmark's own edge that lead to a place of the road. */
 function alongRule(along: Along, { along: start, until, edgeLength }: Placement): NonNullable<Tie['along']> {
   const rule = (from: 'start' | 'end', value: number) =>
-    ({ from, block: null, metres: Math.round(value * 1000) / 1000 + 0, lengths: 0 }) as const
+    ({ from, block: null, metres: toMillimetre(value), lengths: 0 }) as const
   const fromStart = roadGap(start, along)
   if (until === null || fromStart <= 0) return rule('start', fromStart)
   const road = roadAhead(start, until)

@@ -1,7 +1,16 @@
 import { locate, makeCentreline } from '~/track/centreline'
 import { makeLapFrame } from '~/track/lap-frame'
 import { makePlane } from '~/track/plane'
-import { type Along, across, along, type LngLat, type Position, type Station, station } from '~/track/units'
+import {
+  type Along,
+  across,
+  along,
+  type LngLat,
+  type Position,
+  type Station,
+  station,
+  toMillimetre,
+} from '~/track/units'
 import { type LocalPoint, source } from './source'
 
 const plane = makePlane([[source.anchor.lon, source.anchor.lat]])
@@ -23,8 +32,6 @@ export const centreline = makeCentreline(positions)
 /** The circuit is drawn from its start line in driving direction, so that stations and metres of the drawn line are one. */
 export const frame = makeLapFrame({ length: centreline.length, startAlong: along(0), reversed: false })
 
-const millimetres = (value: number) => Math.round(value * 1000) / 1000 + 0
-
 /** Metres of the drawn line at a station of the source, which counts a whole lap as its own length. */
 export function alongAt(sourceStation: number): Along {
   const rows = source.centreline.rows
@@ -33,15 +40,15 @@ export function alongAt(sourceStation: number): Along {
   const before = Math.floor(within / step)
   const share = within / step - before
   const { stations } = centreline
-  return along(millimetres(stations[before]! + share * (stations[before + 1]! - stations[before]!)))
+  return along(toMillimetre(stations[before]! + share * (stations[before + 1]! - stations[before]!)))
 }
 
-export const acrossOf = (offset: number) => across(millimetres(offset))
+export const acrossOf = (offset: number) => across(toMillimetre(offset))
 
 /** Where a local point lies: metres of the drawn line and sideways of it. */
 export function locateLocal(point: LocalPoint) {
   const found = locate(centreline, toLngLat(point))
-  return { along: along(millimetres(found.station)), across: across(millimetres(found.offset)) }
+  return { along: along(toMillimetre(found.station)), across: across(toMillimetre(found.offset)) }
 }
 
 /** Signed metres along the road from one place to another, the shorter way round. */

@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { CAR_LENGTH, CAR_WIDTH, EYE_HEIGHT } from '~/book/limits'
 import { figure, nameField } from '~/components/form/figure'
 import { carWords as words } from '~/words/cars'
 
@@ -8,7 +9,7 @@ const { missing, wrong } = words
 export const carSchema = z.object({
   id: z.uuid(),
   name: nameField(words.nameMissing),
-  length: figure({ least: 2, most: 8, missing, wrong, outside: words.lengthOutside }),
-  width: figure({ least: 1, most: 3, missing, wrong, outside: words.widthOutside }),
-  eyeHeight: figure({ least: 0.4, most: 2.5, missing, wrong, outside: words.eyeOutside }),
+  length: figure({ limits: CAR_LENGTH, missing, wrong, outside: words.lengthOutside }),
+  width: figure({ limits: CAR_WIDTH, missing, wrong, outside: words.widthOutside }),
+  eyeHeight: figure({ limits: EYE_HEIGHT, missing, wrong, outside: words.eyeOutside }),
 })

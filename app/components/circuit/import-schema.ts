@@ -1,4 +1,6 @@
 import { z } from 'zod'
+import { ROAD_WIDTH } from '~/book/limits'
+import { isTimeZone } from '~/book/time-zone'
 import { figure, nameField } from '~/components/form/figure'
 import type { Metres } from '~/track/units'
 import { circuitWords } from '~/words/circuits'
@@ -44,17 +46,8 @@ function checkNumbers(rows: readonly CornerRow[], context: z.RefinementCtx) {
   }
 }
 
-function isTimeZone(timeZone: string): boolean {
-  try {
-    new Intl.DateTimeFormat('en', { timeZone })
-    return true
-  } catch {
-    return false
-  }
-}
-
 const degrees = (most: number, outside: string) =>
-  figure({ least: -most, most, missing: words.anchorMissing, wrong: words.anchorWrong, outside })
+  figure({ limits: [-most, most], missing: words.anchorMissing, wrong: words.anchorWrong, outside })
 
 /** What each step of the form needs; the others' fields are let through as they are. */
 export const stepSchemas = (length: Metres) => ({
@@ -70,8 +63,7 @@ export const stepSchemas = (length: Metres) => ({
   }),
   start: z.object({
     startMetres: figure({
-      least: 0,
-      most: length,
+      limits: [0, length],
       missing: circuitWords.metresMissing,
       wrong: circuitWords.metresWrong,
       outside: circuitWords.metresOutside(length),
@@ -88,8 +80,7 @@ const saveSchema = z.object({
   layout: nameField(words.layoutMissing),
   timeZone: z.string(words.timeZoneMissing).refine(isTimeZone, words.timeZoneMissing),
   roadWidth: figure({
-    least: 4,
-    most: 40,
+    limits: ROAD_WIDTH,
     missing: words.roadWidthMissing,
     wrong: words.roadWidthMissing,
     outside: words.roadWidthOutside,

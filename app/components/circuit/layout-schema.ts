@@ -40,8 +40,7 @@ export const startSchema = (length: Metres) =>
   z.object({
     ...seen,
     startMetres: figure({
-      least: 0,
-      most: length,
+      limits: [0, length],
       missing: words.metresMissing,
       wrong: words.metresWrong,
       outside: words.metresOutside(length),

@@ -1,8 +1,8 @@
 import { z } from 'zod'
+import type { Limits } from '~/book/limits'
 
-interface Limits {
-  least: number
-  most: number
+interface Figure {
+  limits: Limits
   missing: string
   /** What to say of text that is no number. */
   wrong: string
@@ -11,7 +11,7 @@ interface Limits {
 }
 
 /** A number typed as text: digits with a decimal point or comma, blanks around it. Gives the number. */
-export function figure({ least, most, missing, wrong, outside }: Limits) {
+export function figure({ limits: [least, most], missing, wrong, outside }: Figure) {
   return z
     .string(missing)
     .trim()

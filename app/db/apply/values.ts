@@ -1,9 +1,11 @@
 import type * as z from 'zod/mini'
+import { ROAD_WIDTH } from '~/book/limits'
 import type { FieldChange, Json, TargetKind } from '~/book/operation'
 import { FIELDS, FIXED_FIELDS, REQUIRED_FIELDS } from '~/book/schemas'
 import { wrap } from '~/track/lap-frame'
+import { toMillimetre } from '~/track/units'
 import { sameJson } from '../canonical'
-import { ROAD_WIDTH, rangeProblems } from '../checks'
+import { rangeProblems } from '../checks'
 
 /** Values of a target's fields, in their normal form: what is compared and written. */
 export type Values = Record<string, Json>
@@ -92,7 +94,7 @@ function ontoLap(kind: TargetKind, field: string, value: Json, length: number): 
 /** Up to a lap too far or too little is a place on the lap (a nudge across the drawn line's first position); more is a mistake. */
 function alongOnLap(value: number, length: number): number | typeof OUT {
   if (value < -length || value >= 2 * length) return OUT
-  return wrap(Math.round(wrap(value, length) * 1000) / 1000, length)
+  return wrap(toMillimetre(wrap(value, length)), length)
 }
 
 /** All fields of a thing in their normal form; of one that does not exist yet where `stored` is null. */
@@ -147,7 +149,7 @@ function togetherProblems(kind: TargetKind, after: Values): Problem[] {
     problems.push({ field: 'mergedInto', code: 'merged-only' })
   if (kind === 'corner' && !(Number(after.leastRadius) > 0))
     problems.push({ field: 'leastRadius', code: 'out-of-range' })
-  if (kind === 'layout') problems.push(...rangeProblems('roadWidth', Number(after.roadWidth), ...ROAD_WIDTH))
+  if (kind === 'layout') problems.push(...rangeProblems('roadWidth', Number(after.roadWidth), ROAD_WIDTH))
   return problems
 }
 
