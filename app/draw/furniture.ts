@@ -98,7 +98,10 @@ export interface Furniture {
   boxes: Box[]
 }
 
-/** Scale bar at the lower left, needle at the lower right. */
+/** What a map to move on needs in its upper right corner for its buttons, px; a still picture keeps it free as well. */
+const BUTTONS = { desk: { width: 124, height: 50 }, phone: { width: 162, height: 64 } } as const
+
+/** Scale bar at the lower left, needle at the lower right; the boxes also keep the upper right corner free. */
 export function mapFurniture(
   { width, height, pxPerMetre }: Projection,
   words: { metres: (value: number) => string },
@@ -112,6 +115,7 @@ export function mapFurniture(
     boxes: [
       { x: 10, y: height - 28, width: bar.right - 6, height: 24 },
       { x: at[0] - r - 2, y: at[1] - r - 2, width: 2 * r + 4, height: 2 * r + 4 },
+      { x: width - BUTTONS[reader].width, y: 0, ...BUTTONS[reader] },
     ],
   }
 }

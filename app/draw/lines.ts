@@ -10,6 +10,12 @@ export function segmentDistance2([x, y]: Point, [ax, ay]: Point, [bx, by]: Point
 }
 
 /**
+ * How much further a point must be, px², to count as further. Engines differ in the last digits of a sine: of points that
+ * lie equally far the first is taken everywhere, so that the browser draws what the server drew.
+ */
+const FURTHER = 1e-6
+
+/**
  * The line with fewer points, nowhere further than `tolerance` px from the given one; its ends stay.
  * Source: Douglas and Peucker, Cartographica 10 (1973).
  */
@@ -25,7 +31,7 @@ export function simplifyLine(points: readonly Point[], tolerance: number): Point
     let at = 0
     for (let i = from + 1; i < to; i++) {
       const distance = segmentDistance2(points[i]!, points[from]!, points[to]!)
-      if (distance > furthest) {
+      if (distance > furthest + FURTHER) {
         furthest = distance
         at = i
       }
@@ -45,7 +51,7 @@ export function simplifyRing(ring: readonly Point[], tolerance: number): Point[]
   let furthest = -1
   ring.forEach(([px, py], i) => {
     const distance = (px - x) ** 2 + (py - y) ** 2
-    if (distance > furthest) {
+    if (distance > furthest + FURTHER) {
       furthest = distance
       at = i
     }

@@ -72,7 +72,8 @@ function ringsIn(rings: readonly (readonly PlanePoint[])[], projection: Projecti
 
 /** Corners that come from cutting at the picture's border are not rounded. */
 function onBorder(projection: Projection, border: number): (corner: Point) => boolean {
-  const box = sheetBox(projection, border)
+  // A thousandth within: a cut point may come to lie a rounding error inside.
+  const box = sheetBox(projection, border - 0.001)
   const right = box.x + box.width
   const bottom = box.y + box.height
   return ([x, y]) => x <= box.x || x >= right || y <= box.y || y >= bottom

@@ -45,18 +45,13 @@ export function useMapView(plane: Plane, detailFrom: number): MapView {
   return view
 }
 
-/** Height and width of the buttons in the upper right corner, px, with their distance from the edge. */
-const BUTTONS = { width: 124, height: 50 }
 const INSET = 4
 
-/** Where labels may lie on the sheet, and the boxes they keep off: the map's buttons and its furniture. */
+/** Where labels may lie on the sheet, and the boxes of the window's furniture that they keep off. */
 export function labelRoom({ frame }: MapView, furniture: readonly Box[]): { sheet: Box; boxes: Box[] } {
   const { x, y, width, height } = frame
   return {
     sheet: { x: x + INSET, y: y + INSET, width: width - 2 * INSET, height: height - 2 * INSET },
-    boxes: [
-      { x: x + width - BUTTONS.width, y, ...BUTTONS },
-      ...furniture.map((box) => ({ ...box, x: box.x + x, y: box.y + y })),
-    ],
+    boxes: furniture.map((box) => ({ ...box, x: box.x + x, y: box.y + y })),
   }
 }
