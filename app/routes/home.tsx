@@ -1,21 +1,23 @@
 import { href } from 'react-router'
 import { OutsideFrame } from '~/components/frame/outside-frame'
 import { SignOutButton } from '~/components/frame/sign-out-button'
+import { HomeCorner } from '~/components/home/home-corner'
 import { SignInForm } from '~/components/sign-in/sign-in-form'
 import { ButtonLink } from '~/components/ui/button'
 import { personContext } from '~/middleware/person.server'
+import { pageWidth } from '~/middleware/sheet-width.server'
 import { homeWords } from '~/words/home'
 import { signInWords } from '~/words/sign-in'
 import type { Route } from './+types/home'
 
 export const meta = () => [{ title: 'Turnstone' }, { name: 'description', content: homeWords.lead }]
 
-export function loader({ context }: Route.LoaderArgs) {
+export function loader({ request, context }: Route.LoaderArgs) {
   const person = context.get(personContext)
-  return { person: person && { name: person.name } }
+  return { person: person && { name: person.name }, sheet: pageWidth(request) }
 }
 
-export default function Home({ loaderData: { person } }: Route.ComponentProps) {
+export default function Home({ loaderData: { person, sheet } }: Route.ComponentProps) {
   return (
     <OutsideFrame right={person && <SignOutButton />}>
       <main className="flex flex-1 flex-col">
@@ -36,6 +38,9 @@ export default function Home({ loaderData: { person } }: Route.ComponentProps) {
           ) : (
             <SignInForm />
           )}
+        </div>
+        <div className="mt-7">
+          <HomeCorner sheet={sheet} />
         </div>
         <div className="mt-auto grid gap-x-12 gap-y-4 px-4 pt-7 pb-5 min-[800px]:grid-cols-3 min-[800px]:px-14">
           {homeWords.uses.map(({ when, what }) => (

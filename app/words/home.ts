@@ -6,7 +6,7 @@ export const homeWords = {
     'see from the seat. Hold what the simulator taught against what you found on foot. Say of each place whether it was ' +
     'told, seen on foot or driven.',
   uses: [
-    { when: 'Before.', what: 'Mark the corner from the simulator, hollow. The coach writes on it.' },
+    { when: 'Before.', what: 'Mark the corner from the simulator, hollow. The coach corrects it.' },
     { when: 'At the track.', what: 'Set the real place beside it, solid. See how much sooner or later it is here.' },
     { when: 'Between sessions.', what: 'One corner at a time: what marks it, how far before, who has proved it.' },
   ],
