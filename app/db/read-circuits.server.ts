@@ -6,22 +6,37 @@ import { type Along, along, type Metres, metres } from '~/track/units'
 import type { Db } from './database'
 import { ownTeam } from './own-team'
 import { readLandmarks, readStretches } from './read-landmarks.server'
-import { books, circuits, corners, layouts } from './schema'
+import { books, centrelines, circuits, corners, layouts } from './schema'
 
 /** A circuit's layout in a list. */
 export interface CircuitEntry {
   id: CircuitId
   slug: string
   name: string
-  layout: { id: LayoutId; name: string; length: Metres; centreline: GeometryHash }
+  layout: { id: LayoutId; name: string; length: Metres }
+  /** The road in the small: metres east and north by turns, in drawing order. */
+  outline: number[]
   corners: number
   books: number
 }
 
+const byName = [asc(circuits.name), asc(circuits.id), asc(layouts.createdAt), asc(layouts.id)]
 const onCircuit = and(eq(layouts.teamId, circuits.teamId), eq(layouts.circuitId, circuits.id))
 
-/** The team's circuits by name, one entry for each layout. */
-export async function readCircuits(db: Db, actor: Actor): Promise<CircuitEntry[]> {
+/** Entries on one page of a list. */
+export const CIRCUITS_A_PAGE = 24
+
+export interface CircuitsPage {
+  entries: CircuitEntry[]
+  /** Whether another page follows. */
+  goesOn: boolean
+}
+
+/**
+ * A page of the team's circuits by name, one entry for each layout.
+ * @param page counted from 1
+ */
+export async function readCircuits(db: Db, actor: Actor, page = 1): Promise<CircuitsPage> {
   const rows = await db
     .select({
       id: circuits.id,
@@ -31,8 +46,8 @@ export async function readCircuits(db: Db, actor: Actor): Promise<CircuitEntry[]
         id: layouts.id,
         name: layouts.name,
         length: layouts.length,
-        centreline: layouts.centrelineHash,
       },
+      outline: centrelines.outline,
       corners: db.$count(
         corners,
         and(eq(corners.teamId, layouts.teamId), eq(corners.layoutId, layouts.id), eq(corners.state, 'live')),
@@ -41,9 +56,34 @@ export async function readCircuits(db: Db, actor: Actor): Promise<CircuitEntry[]
     })
     .from(circuits)
     .innerJoin(layouts, onCircuit)
+    .innerJoin(centrelines, and(eq(centrelines.teamId, layouts.teamId), eq(centrelines.hash, layouts.centrelineHash)))
     .where(and(ownTeam(actor, circuits.teamId), eq(layouts.state, 'live')))
-    .orderBy(asc(circuits.name), asc(circuits.id), asc(layouts.createdAt))
-  return rows.map((row) => ({ ...row, layout: { ...row.layout, length: metres(row.layout.length) } }))
+    .orderBy(...byName)
+    .limit(CIRCUITS_A_PAGE + 1)
+    .offset((page - 1) * CIRCUITS_A_PAGE)
+  const entries = rows
+    .slice(0, CIRCUITS_A_PAGE)
+    .map((row) => ({ ...row, layout: { ...row.layout, length: metres(row.layout.length) } }))
+  return { entries, goesOn: rows.length > CIRCUITS_A_PAGE }
+}
+
+/** A layout by name, to choose from. */
+export interface LayoutChoice {
+  id: LayoutId
+  circuit: string
+  name: string
+  length: Metres
+}
+
+/** Every layout of the team that a book can be made for, by its circuit's name. */
+export async function readLayouts(db: Db, actor: Actor): Promise<LayoutChoice[]> {
+  const rows = await db
+    .select({ id: layouts.id, circuit: circuits.name, name: layouts.name, length: layouts.length })
+    .from(circuits)
+    .innerJoin(layouts, onCircuit)
+    .where(and(ownTeam(actor, circuits.teamId), eq(layouts.state, 'live')))
+    .orderBy(...byName)
+  return rows.map((row) => ({ ...row, length: metres(row.length) }))
 }
 
 /** A circuit with one layout, as its editor needs it. Places are metres of the drawn line. */

@@ -8,6 +8,9 @@ export const circuitWords = {
   bringIn: 'Bring a circuit in',
   none: 'No circuit yet.',
   noneQuestion: 'Have you a lap of it, or its centreline, as a file?',
+  pages: 'Pages of circuits',
+  pageBefore: 'Circuits before these',
+  pageAfter: 'More circuits',
   outline: (name: string) => `Outline of ${name}`,
   facts: {
     length: 'Length',

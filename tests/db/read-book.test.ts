@@ -1,11 +1,12 @@
 import { beforeAll, describe, expect, test } from 'vitest'
 import type { Operation } from '~/book/operation'
 import { applyBatch, applyOperation } from '~/db/apply.server'
+import { importCircuit } from '~/db/circuits.server'
 import { addFindings } from '~/db/journal.server'
 import { readBook } from '~/db/read-book.server'
 import { readBooks } from '~/db/read-books.server'
 import { readChanges } from '~/db/read-changes.server'
-import { readCircuit, readCircuits } from '~/db/read-circuits.server'
+import { CIRCUITS_A_PAGE, type CircuitsPage, readCircuit, readCircuits, readLayouts } from '~/db/read-circuits.server'
 import { readCentreline, readGround } from '~/db/read-geometry.server'
 import { readTeamPeople } from '~/db/read-team.server'
 import {
@@ -13,6 +14,7 @@ import {
   addsMark,
   type Book,
   bookOf,
+  circuit,
   db,
   expectKind,
   makeTeam,
@@ -110,7 +112,7 @@ describe('a book', () => {
     test('shows in no list, no log, no geometry', async () => {
       const { manager } = stranger.team
       expect((await readBooks(db, manager)).map(({ id }) => id)).toEqual([stranger.id])
-      expect((await readCircuits(db, manager)).map(({ layout }) => layout.id)).toEqual([stranger.layout])
+      expect((await readCircuits(db, manager)).entries.map(({ layout }) => layout.id)).toEqual([stranger.layout])
       expect(await readChanges(db, manager, { book: book.view.book.id, limit: 50 })).toEqual([])
       const log = await readChanges(db, manager, { limit: 500 })
       expect(log.filter(({ book: id }) => id === book.view.book.id)).toEqual([])
@@ -139,21 +141,41 @@ describe('lists', () => {
     expect(await readBooks(db, book.team.driver)).toMatchObject([
       { slug: 'sandbar', circuit: 'Sandbar', car: 'Car 41', corners: 2, marks: 4, archived: false },
     ])
-    expect(await readCircuits(db, book.team.driver)).toMatchObject([{ slug: 'sandbar', corners: 2, books: 1 }])
+    const { entries, goesOn } = await readCircuits(db, book.team.driver)
+    expect(entries).toMatchObject([{ slug: 'sandbar', corners: 2, books: 1 }])
+    expect(goesOn).toBe(false)
+    const across = entries[0]!.outline.filter((_, i) => i % 2 === 0)
+    expect(Math.max(...across) - Math.min(...across)).toBeCloseTo(400, -1)
+  })
+
+  test('circuits come in pages by name, each page in one statement; those to choose from come all at once', async () => {
+    const { coach } = await makeTeam()
+    const names = Array.from({ length: CIRCUITS_A_PAGE + 2 }, (_, i) => `Sandbar ${String.fromCharCode(65 + i)}`)
+    for (const name of [...names].reverse()) {
+      const drawn = circuit([])
+      expect((await importCircuit(db, coach, { ...drawn, circuit: { ...drawn.circuit, name } })).kind).toBe('made')
+    }
+    const namesOf = ({ entries }: CircuitsPage) => entries.map(({ name }) => name)
+    const [first, second] = [await readCircuits(db, coach), await readCircuits(db, coach, 2)]
+    expect([...namesOf(first), ...namesOf(second)]).toEqual(names)
+    expect([first.goesOn, second.goesOn]).toEqual([true, false])
+    expect(await readCircuits(db, coach, 3)).toEqual({ entries: [], goesOn: false })
+    expect((await readLayouts(db, coach)).map((layout) => layout.circuit)).toEqual(names)
+    expect(await statementsOf(() => readCircuits(db, coach))).toBe(1)
   })
 
   test('a circuit for editing has its corners in road order, its landmarks and its centreline', async () => {
     const book = await makeTeamBook(await makeTeam())
     await fill(book, 1)
-    const circuit = await readCircuit(db, book.team.coach, 'sandbar')
-    expect(circuit?.corners.map(({ number, datum }) => [number, datum.along])).toEqual([
+    const read = await readCircuit(db, book.team.coach, 'sandbar')
+    expect(read?.corners.map(({ number, datum }) => [number, datum.along])).toEqual([
       ['1', 252],
       ['2', 702],
     ])
-    expect(circuit?.landmarks).toMatchObject([{ name: 'White post', real: { along: 90, across: 7.4 } }])
-    const centreline = await readCentreline(db, book.team.coach, circuit!.layout.centreline)
-    expect(centreline?.length).toBeCloseTo(circuit!.layout.length, 6)
-    expect(await readCentreline(db, book.team.coach, circuit!.layout.centreline)).toBe(centreline)
+    expect(read?.landmarks).toMatchObject([{ name: 'White post', real: { along: 90, across: 7.4 } }])
+    const centreline = await readCentreline(db, book.team.coach, read!.layout.centreline)
+    expect(centreline?.length).toBeCloseTo(read!.layout.length, 6)
+    expect(await readCentreline(db, book.team.coach, read!.layout.centreline)).toBe(centreline)
   })
 
   test('the log says whose thing was changed, also of a thing that is gone, and of nobody’s', async () => {

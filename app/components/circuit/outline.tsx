@@ -1,45 +1,22 @@
-import { Suspense } from 'react'
-import type { GeometryHash } from '~/book/ids'
-import { useCentreline } from '~/components/geometry/geometry-store'
 import { linePath } from '~/draw/display-list'
-import { simplifyRing } from '~/draw/lines'
+import { boundsOf } from '~/draw/lines'
 import { circuitWords } from '~/words/circuits'
 
 interface OutlineProps {
-  team: string
   name: string
-  centreline: GeometryHash
+  /** Metres east and north by turns, a closed ring whose first place is not repeated. */
+  outline: readonly number[]
 }
 
 const WIDTH = 120
 const HEIGHT = 76
 const EDGE = 5
-/** Detail that is dropped, px. */
-const TOLERANCE = 0.3
 
 /** A circuit's road in the small, north up, for a list. */
-export function CircuitOutline(props: OutlineProps) {
-  return (
-    <span className="block h-19 w-30 flex-none">
-      <Suspense>
-        <Outline {...props} />
-      </Suspense>
-    </span>
-  )
-}
-
-function Outline({ team, name, centreline }: OutlineProps) {
-  const { x, y } = useCentreline(team, centreline)
-  const [west, east] = [x.reduce((a, b) => Math.min(a, b)), x.reduce((a, b) => Math.max(a, b))]
-  const [south, north] = [y.reduce((a, b) => Math.min(a, b)), y.reduce((a, b) => Math.max(a, b))]
-  const scale = Math.min((WIDTH - 2 * EDGE) / (east - west || 1), (HEIGHT - 2 * EDGE) / (north - south || 1))
-  const points = Array.from(
-    x,
-    (value, i) =>
-      [WIDTH / 2 + (value - (west + east) / 2) * scale, HEIGHT / 2 - (y[i]! - (south + north) / 2) * scale] as const,
-  )
+export function CircuitOutline({ name, outline }: OutlineProps) {
   return (
     <svg
+      className="block flex-none"
       width={WIDTH}
       height={HEIGHT}
       viewBox={`0 0 ${WIDTH} ${HEIGHT}`}
@@ -47,12 +24,23 @@ function Outline({ team, name, centreline }: OutlineProps) {
       aria-label={circuitWords.outline(name)}
     >
       <path
-        d={linePath(simplifyRing(points, TOLERANCE), true)}
+        d={linePath(onSheet(outline), true)}
         fill="none"
         stroke="var(--asphalt-dark)"
         strokeWidth="3"
         strokeLinejoin="round"
       />
     </svg>
+  )
+}
+
+/** The ring in px, as large as the sheet lets it be. */
+function onSheet(outline: readonly number[]) {
+  const places = Array.from({ length: outline.length / 2 }, (_, i) => [outline[2 * i]!, outline[2 * i + 1]!] as const)
+  const { x, y, width, height } = boundsOf(places)
+  const scale = Math.min((WIDTH - 2 * EDGE) / (width || 1), (HEIGHT - 2 * EDGE) / (height || 1))
+  return places.map(
+    ([east, north]) =>
+      [WIDTH / 2 + (east - x - width / 2) * scale, HEIGHT / 2 - (north - y - height / 2) * scale] as const,
   )
 }

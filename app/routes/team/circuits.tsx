@@ -1,12 +1,11 @@
 import { href } from 'react-router'
 import { may } from '~/book/may'
-import { CircuitList } from '~/components/circuit/circuit-list'
+import { CircuitList, CircuitPages } from '~/components/circuit/circuit-list'
 import { PageBody, PageHead } from '~/components/frame/page-frame'
 import { ButtonLink } from '~/components/ui/button'
 import { Empty } from '~/components/ui/empty'
 import { readCircuits } from '~/db/read-circuits.server'
 import { dbContext } from '~/middleware/context'
-import { layOutCentreline } from '~/middleware/lay-out-geometry.server'
 import { allow } from '~/middleware/refusal.server'
 import { teamContext } from '~/middleware/team.server'
 import { circuitWords as words } from '~/words/circuits'
@@ -16,19 +15,24 @@ import type { Route } from './+types/circuits'
 
 export const meta: Route.MetaFunction = ({ loaderData }) => [{ title: pageTitle(words.title, loaderData?.team ?? '') }]
 
-export async function loader({ context }: Route.LoaderArgs) {
+/** The page asked for, the first for anything else. */
+const pageIn = (url: URL) => Number(/^[1-9]\d{0,3}$/.exec(url.searchParams.get('page') ?? '')?.[0] ?? 1)
+
+export async function loader({ url, context }: Route.LoaderArgs) {
   const { actor, team } = context.get(teamContext)
   allow(actor, 'circuit.read')
-  const circuits = await readCircuits(context.get(dbContext), actor)
-  await Promise.all(circuits.map(({ layout }) => layOutCentreline(context, actor, layout.centreline)))
+  const page = pageIn(url)
+  const { entries, goesOn } = await readCircuits(context.get(dbContext), actor, page)
   return {
     team: team.name,
     mayChange: may(actor, 'circuit.change').ok,
-    circuits: circuits.map(({ slug, name, layout, corners, books }) => ({ slug, name, layout, corners, books })),
+    circuits: entries,
+    page,
+    goesOn,
   }
 }
 
-export default function Circuits({ loaderData: { circuits, mayChange }, params }: Route.ComponentProps) {
+export default function Circuits({ loaderData: { circuits, mayChange, page, goesOn }, params }: Route.ComponentProps) {
   const bringIn = mayChange && (
     <ButtonLink look={circuits.length === 0 ? 'go' : 'plain'} to={href('/teams/:team/circuits/import', params)}>
       {words.bringIn}
@@ -39,12 +43,15 @@ export default function Circuits({ loaderData: { circuits, mayChange }, params }
       <PageHead title={words.title} lead={words.lead}>
         {circuits.length > 0 && bringIn}
       </PageHead>
-      {circuits.length === 0 ? (
+      {circuits.length === 0 && page === 1 ? (
         <Empty lead={words.none} question={words.noneQuestion}>
           {bringIn || <p className="muted">{teamWords.deskOnly}</p>}
         </Empty>
       ) : (
-        <CircuitList team={params.team} circuits={circuits} />
+        <>
+          <CircuitList team={params.team} circuits={circuits} />
+          <CircuitPages page={page} goesOn={goesOn} />
+        </>
       )}
     </PageBody>
   )

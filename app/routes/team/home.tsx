@@ -9,7 +9,6 @@ import { readChanges } from '~/db/read-changes.server'
 import { readCircuits } from '~/db/read-circuits.server'
 import { readNames } from '~/db/read-team.server'
 import { dbContext } from '~/middleware/context'
-import { layOutCentreline } from '~/middleware/lay-out-geometry.server'
 import { allow } from '~/middleware/refusal.server'
 import { teamContext } from '~/middleware/team.server'
 import { pageTitle } from '~/words/titles'
@@ -22,11 +21,10 @@ export async function loader({ context }: Route.LoaderArgs): Promise<TeamHomeDat
   allow(actor, 'team.read')
   const db = context.get(dbContext)
   const [books, circuits] = await Promise.all([readBooks(db, actor), readCircuits(db, actor)])
-  await Promise.all(circuits.map(({ layout }) => layOutCentreline(context, actor, layout.centreline)))
   return {
     team: { slug: team.slug, name: team.name },
     books: bookLines(books, new Date().toISOString()),
-    circuits: circuits.map(({ slug, name, layout, corners, books }) => ({ slug, name, layout, corners, books })),
+    circuits: circuits.entries,
     changes: await latestChanges(context, books),
     may: { makeBook: may(actor, 'book.make').ok, bringIn: may(actor, 'circuit.change').ok },
   }

@@ -9,7 +9,7 @@ import { ButtonLink } from '~/components/ui/button'
 import { Empty } from '~/components/ui/empty'
 import { makeBook } from '~/db/books.server'
 import { readCars } from '~/db/cars.server'
-import { readCircuits } from '~/db/read-circuits.server'
+import { readLayouts } from '~/db/read-circuits.server'
 import { dbContext } from '~/middleware/context'
 import { readForm } from '~/middleware/read-form.server'
 import { allow, refusalOf } from '~/middleware/refusal.server'
@@ -28,13 +28,7 @@ export async function loader({ url, context }: Route.LoaderArgs) {
   const { actor, team } = context.get(teamContext)
   allow(actor, 'book.make')
   const db = context.get(dbContext)
-  const [circuits, cars] = await Promise.all([readCircuits(db, actor), readCars(db, actor)])
-  const layouts = circuits.map(({ name, layout }) => ({
-    id: layout.id as string,
-    circuit: name,
-    name: layout.name,
-    length: layout.length,
-  }))
+  const [layouts, cars] = await Promise.all([readLayouts(db, actor), readCars(db, actor)])
   const asked = layouts.find(({ id }) => id === url.searchParams.get('layout')) ?? onlyOne(layouts)
   return {
     team: team.name,
@@ -57,12 +51,12 @@ export async function action({ request, params, context }: Route.ActionArgs) {
   if (submission.status !== 'success') return data(submission.reply(), { status })
   const db = context.get(dbContext)
   const layout = submission.value.layout as LayoutId
-  const circuit = (await readCircuits(db, actor)).find((entry) => entry.layout.id === layout)
+  const chosen = (await readLayouts(db, actor)).find(({ id }) => id === layout)
   const outcome = await makeBook(db, actor, {
     id: submission.value.id as BookId,
     layout,
     car: submission.value.car as CarId,
-    name: submission.value.name ?? circuit?.name ?? '',
+    name: submission.value.name ?? chosen?.circuit ?? '',
   })
   if (outcome.kind === 'invalid') {
     const fieldErrors = Object.fromEntries(
