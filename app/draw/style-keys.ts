@@ -65,15 +65,7 @@ const SHEET = [
   'target',
 ] as const
 
-const PROFILE = [
-  'grid',
-  'axis',
-  'profile-ground',
-  'profile-line',
-  'profile-sim',
-  'profile-stem',
-  'profile-missing',
-] as const
+const PROFILE = ['grid', 'axis', 'profile-ground', 'profile-line', 'profile-stem', 'profile-missing'] as const
 
 const LANDMARKS = [
   'board',
@@ -119,6 +111,6 @@ export const STYLE_KEYS: readonly StyleKey[] = [
   ...MARK_KINDS.map((kind): StyleKey => `tether-${kind}`),
 ]
 
-/** What a word is under which a letter stands: its halo is painted in that ground. */
-export const HALO_KEYS = ['paper', 'sand', 'asphalt', 'grass', 'gravel', 'sea'] as const
+/** The ground under words: their halo is painted in it. */
+export const HALO_KEYS = ['paper', 'sand', 'asphalt', 'gravel', 'sea'] as const
 export type HaloKey = (typeof HALO_KEYS)[number]

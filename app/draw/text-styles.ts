@@ -13,7 +13,6 @@ const FACES = {
   'plate-open-number': { size: 13.5, weight: 720, stretch: 82 },
   'corner-name': { size: 14, weight: 600, stretch: 100 },
   'place-name': { size: 12.5, weight: 520, stretch: 82 },
-  'aim-name': { size: 12.5, weight: 560, stretch: 82 },
   'water-name': { size: 17, weight: 480, stretch: 125, tracking: 0.12 },
   'sheet-title': { size: 22, weight: 740, stretch: 120, tracking: -0.01 },
   'sheet-text': { size: 13, weight: 480, stretch: 100 },
