@@ -42,26 +42,27 @@ describe('what a person does on a page, as operations', () => {
     expect(added.set.sim).toEqual({ from: null, to: { along: 300, across: -3, tie: null } })
   })
 
-  it('moves a place from what was seen, keeps the words of its tie and lets go of its measure', () => {
-    const tie = {
-      landmarkId: ids.kerb,
-      along: { from: 'end' as const, block: null, metres: 2, lengths: 0 },
-      across: null,
-      words: '100 board, left',
-      acrossWords: null,
-    }
-    const moved = changeMark(
-      making,
-      id,
-      'real',
-      { ...details, place: place(120, 4, tie) },
-      { ...details, at: given },
-      frame,
-    )!
-    expect(moved.set.real).toEqual({
+  const tie = {
+    landmarkId: ids.kerb,
+    along: { from: 'end' as const, block: null, metres: 2, lengths: 0 },
+    across: null,
+    words: '100 board, left',
+    acrossWords: 'left wheels on the line',
+  }
+  const movedTo = (along: number, across: number) =>
+    changeMark(making, id, 'real', { ...details, place: place(along, across, tie) }, { ...details, at: given }, frame)!
+
+  it('moves a place from what was seen and lets go of the thing it stood at', () => {
+    expect(movedTo(120, 4).set.real).toEqual({
       from: { along: 120, across: 4, tie },
-      to: { along: 300, across: -3, tie: { ...tie, along: null } },
+      to: { along: 300, across: -3, tie: null },
     })
+  })
+
+  it('keeps the words of a tie where the mark still stands at the thing, those across only on the same line', () => {
+    expect(movedTo(300.9, -3.2).set.real?.to).toMatchObject({ tie: { ...tie, along: null } })
+    expect(movedTo(300.9, -3.4).set.real?.to).toMatchObject({ tie: { words: '100 board, left', acrossWords: null } })
+    expect(movedTo(301.2, -3).set.real?.to).toMatchObject({ tie: null })
   })
 
   it('starts from the place as it is stored, so that the write path finds it unchanged', () => {

@@ -70,10 +70,7 @@ export interface GivenMark extends Omit<SeenMark, 'place'> {
   at?: GivenPlace
 }
 
-/**
- * Changes one place of a mark and what goes with it; null where nothing differs from what was seen. A place put elsewhere by
- * hand no longer hangs on its landmark's measure; the words of its tie stay, since only a person can say whether they hold.
- */
+/** Changes one place of a mark and what goes with it; null where nothing differs from what was seen. */
 export function changeMark(
   making: Making,
   mark: MarkId,
@@ -84,13 +81,25 @@ export function changeMark(
 ): Operation | null {
   const set: Record<string, FieldChange> = {}
   if (given.at) {
-    const tie = seen.place?.tie ? { ...seen.place.tie, along: null } : null
-    const to = storedPlace(given.at, tie, frame)
+    const to = storedPlace(given.at, tieAfter(seen.place, given.at, frame), frame)
     if (!samePlace(seen.place, to)) set[ground] = { from: asJson(seen.place), to }
   }
   for (const field of ['manner', 'gear', 'speed'] as const)
     if (seen[field] !== given[field]) set[field] = { from: seen[field], to: given[field] }
   return Object.keys(set).length === 0 ? null : operation(making, mark, set)
+}
+
+/** Moved by more than this along the road, a mark no longer stands at the thing it was tied to; across, at its line. Metres. */
+const TIE_REACH = { along: 1, across: 0.25 } as const
+
+/**
+ * What is left of a tie when its place is put elsewhere by hand: never the landmark's measure; its words as long as the mark
+ * still stands where they say.
+ */
+function tieAfter(seen: Place | null, at: GivenPlace, frame: LapFrame): Place['tie'] {
+  if (!seen?.tie || Math.abs(frame.gap(frame.toStation(seen.along), at.station)) > TIE_REACH.along) return null
+  const stays = Math.abs(frame.toOffset(seen.across) - at.offset) <= TIE_REACH.across
+  return { ...seen.tie, along: null, ...(stays ? {} : { across: null, acrossWords: null }) }
 }
 
 /** Takes one of a mark's two places away. */

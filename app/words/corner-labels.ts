@@ -42,6 +42,7 @@ export const cornerLabels = {
   },
   fromDry: 'from dry',
   simOnly: 'simulator only',
+  simPlace: 'in the simulator',
   atDatum: 'at the datum',
   former: 'former member',
   card: 'Card',

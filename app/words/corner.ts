@@ -26,7 +26,8 @@ const where: Record<Ground, string> = { sim: 'in the simulator', real: 'on the r
 export const corner = {
   added: (mark: string, toDatum: Metres, ground: Ground) =>
     `${mark} added, ${formatToDatum(toDatum)} ${where[ground]}.`,
-  moved: (mark: string, toDatum: Metres, ground: Ground) => `${mark}: now ${formatToDatum(toDatum)} ${where[ground]}.`,
+  moved: (mark: string, toDatum: Metres, across: string, ground: Ground) =>
+    `${mark}: now ${formatToDatum(toDatum)}, ${across}, ${where[ground]}.`,
   changed: (mark: string) => `${mark} changed.`,
   dropped: (mark: string) => `${mark} taken off the book.`,
   cleared: (mark: string, ground: Ground) => `${mark} has no place ${where[ground]} any more.`,
@@ -61,7 +62,8 @@ export const corner = {
     'Simulator marks are not proven on the real surface. Seen on foot is not a proven braking distance. Officials, flags and the drivers’ briefing come first.',
   mapLabel: (name: string) => `Map of ${name}`,
   mapDescription: 'The road with its landmarks and marks. The table below tells the same in road order.',
-  mapHint: `Tap the map to add. Drag a mark, or focus it and press an arrow key: 1${NBSP}m along or across, 10${NBSP}m with Shift.`,
+  mapHint: 'Tap the map to add a mark; drag one to move it.',
+  mapKeys: `Or focus it: up and down are 1${NBSP}m along the road, left and right 1${NBSP}m across, 10${NBSP}m with Shift.`,
   form: {
     kind: 'Choose what happens here.',
     metres: 'Metres to the datum, as a number from 0.',

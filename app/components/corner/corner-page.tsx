@@ -1,5 +1,5 @@
 import type { SubmissionResult } from '@conform-to/react'
-import { Suspense, useCallback, useState } from 'react'
+import { Suspense, useCallback, useEffect, useState } from 'react'
 import { Link, useNavigate, useSearchParams } from 'react-router'
 import { GROUNDS, type Ground } from '~/book/kinds'
 import { DrawingBoundary } from '~/components/geometry/drawing-boundary'
@@ -28,22 +28,23 @@ interface CornerPageProps {
 export function CornerPage({ page, result, lastResult }: CornerPageProps) {
   const { open, linkWith } = useOpenForm()
   const corner = page.cut.corner
-  const [latest, setFromMap] = useLatest(result)
+  const { latest, setFromMap, dismiss } = useLatest(corner.id, result)
   const closeTo = linkWith({ add: null, mark: null })
   const navigate = useNavigate()
   const go = (to: string) => navigate(to, { preventScrollReset: true, replace: true })
   const onSelect = (mark: string) => go(linkWith({ mark, add: null }))
+  useClosing(result, closeTo)
   const onAdd = (place: TypedPlace) => go(linkWith({ ...place, add: '1', mark: null }))
   return (
     <main className="corner-page">
       <div className="corner-main">
         <CornerHead page={page} linkWith={linkWith} />
-        {latest ? <Outcome {...{ closeTo }} result={latest} operation={page.ids.operation} /> : null}
         <DrawingBoundary className="map-panel">
           <Suspense fallback={<div className="map-panel waiting" />}>
             <MapPanel {...{ page }} selected={open.mark} onAdd={onAdd} onSelect={onSelect} onResult={setFromMap} />
           </Suspense>
         </DrawingBoundary>
+        {latest ? <Outcome {...{ closeTo, dismiss }} result={latest} operation={page.ids.operation} /> : null}
         <OpenForm {...{ page, open, closeTo, lastResult }} />
         {page.lines.length > 0 ? (
           <MarkTable page={page} selected={open.mark} linkTo={(mark) => linkWith({ mark, add: null })} />
@@ -64,12 +65,26 @@ export function CornerPage({ page, result, lastResult }: CornerPageProps) {
   )
 }
 
-/** The outcome of what was sent last, by a form or from the map. */
-function useLatest(result: CornerResult | null) {
-  const [shown, setShown] = useState({ result, fromMap: null as CornerResult | null })
-  if (shown.result !== result) setShown({ result, fromMap: null })
+/** The outcome of what was sent last in this corner, by a form or from the map; it stays until something else is sent. */
+function useLatest(corner: string, result: CornerResult | null) {
+  const [shown, setShown] = useState({ corner, result, fromForm: result, fromMap: null as CornerResult | null })
+  if (shown.corner !== corner) setShown({ corner, result, fromForm: result, fromMap: null })
+  else if (shown.result !== result)
+    setShown((before) => ({ ...before, result, ...(result ? { fromForm: result, fromMap: null } : {}) }))
   const setFromMap = useCallback((fromMap: CornerResult) => setShown((before) => ({ ...before, fromMap })), [])
-  return [shown.fromMap ?? result, setFromMap] as const
+  const dismiss = useCallback(() => setShown((before) => ({ ...before, fromForm: null, fromMap: null })), [])
+  return { latest: shown.fromMap ?? shown.fromForm, setFromMap, dismiss }
+}
+
+/** A form whose change is done is closed. */
+function useClosing(result: CornerResult | null, closeTo: string) {
+  const navigate = useNavigate()
+  const [search] = useSearchParams()
+  const isOpen = search.has('add') || search.has('mark')
+  const isDone = result?.kind === 'done'
+  useEffect(() => {
+    if (isDone && isOpen) navigate(closeTo, { preventScrollReset: true, replace: true })
+  }, [isDone, isOpen, closeTo, navigate])
 }
 
 export type LinkWith = (change: Record<string, string | null>) => string
@@ -124,6 +139,7 @@ function OpenForm({
         <ChangeMarkForm
           key={`${mark.id} ${ground} ${JSON.stringify(mark[ground]?.stored)}`}
           {...{ page, closeTo, lastResult, mark, ground }}
+          mayDrop={ground === grounds[0]}
         />
       ))}
     </div>

@@ -47,7 +47,11 @@ export function MapPanel({ page, selected, onAdd, onSelect, onResult }: MapPanel
           </button>
         </Toast>
       ) : null}
-      {page.may.add ? <p className="map-hint">{words.mapHint}</p> : null}
+      {page.may.add ? (
+        <p className="map-hint">
+          {words.mapHint} <span className="map-keys">{words.mapKeys}</span>
+        </p>
+      ) : null}
     </>
   )
 }

@@ -72,7 +72,8 @@ export function ChangeMarkForm({
   lastResult,
   mark,
   ground,
-}: FormProps & { mark: MarkView; ground: Ground }) {
+  mayDrop,
+}: FormProps & { mark: MarkView; ground: Ground; mayDrop: boolean }) {
   const place = mark[ground]
   const shown = place ? typedFrom(place) : null
   const details = { manner: mark.manner ?? '', gear: mark.gear?.toString() ?? '', speed: kmhField(mark.speed) }
@@ -110,7 +111,7 @@ export function ChangeMarkForm({
             </Button>
           </Form>
         ) : null}
-        {place ? (
+        {mayDrop ? (
           <Form method="post" preventScrollReset>
             <Hidden intent="drop" {...named} />
             <Button look="danger" size="small">

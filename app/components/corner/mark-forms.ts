@@ -1,7 +1,9 @@
 import { z } from 'zod'
 import * as mini from 'zod/mini'
 import { type BrakeRole, GROUNDS, MANNERS, MARK_KINDS, type MarkKind } from '~/book/kinds'
+import type { Limits } from '~/book/limits'
 import { placeSchema } from '~/book/schemas'
+import { figure } from '~/components/form/figure'
 import { corner as words } from '~/words/corner'
 import { FARTHEST_ACROSS } from './typed-place'
 
@@ -21,11 +23,12 @@ export function kindOfChoice(choice: MarkChoice): { kind: MarkKind; role: BrakeR
 }
 
 const id = z.uuid()
-const number = (error: string) => z.number({ error })
-const metres = number(words.form.metres).min(0, words.form.metres).max(5000, words.form.metresFar)
-const across = number(words.form.across).min(0, words.form.across).max(FARTHEST_ACROSS, words.form.acrossFar)
-const speed = number(words.form.speed).min(0, words.form.speed).max(500, { error: words.form.speedFar }).optional()
-const gear = number(words.form.gear).int(words.form.gear).min(1, words.form.gear).max(10, words.form.gear).optional()
+const measured = (limits: Limits, wrong: string, outside: Parameters<typeof figure>[0]['outside']) =>
+  figure({ limits, missing: wrong, wrong, outside })
+const metres = measured([0, 5000], words.form.metres, words.form.metresFar)
+const across = measured([0, FARTHEST_ACROSS], words.form.across, words.form.acrossFar)
+const speed = measured([0, 500], words.form.speed, words.form.speedFar).optional()
+const gear = measured([1, 10], words.form.gear, words.form.gear).pipe(z.number().int(words.form.gear)).optional()
 
 const where = {
   ground: z.enum(GROUNDS),

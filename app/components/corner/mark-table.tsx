@@ -99,7 +99,7 @@ function MarkRow({ page, line, mark, place, open, to }: MarkRowProps) {
         {place.stored.tie?.acrossWords ?? acrossWords(place.offset, layout.roadWidth, car.width)}
       </td>
       <td className="known">
-        <Known {...{ page, line, place }} />
+        <Known {...{ page, line, mark, place }} />
       </td>
       <td className="against">
         {line.againstSim === null ? null : (
@@ -138,8 +138,8 @@ function how(mark: MarkView) {
   return mark.manner ? mannerWord(mark.manner) : ''
 }
 
-function Known({ page, line, place }: Pick<MarkRowProps, 'page' | 'line' | 'place'>) {
-  if (line.ground === 'sim') return <span className="muted">{labels.simOnly}</span>
+function Known({ page, line, mark, place }: Pick<MarkRowProps, 'page' | 'line' | 'mark' | 'place'>) {
+  if (line.ground === 'sim') return <span className="muted">{mark.real ? labels.simPlace : labels.simOnly}</span>
   const proof = shownProof(place, page.condition, page.me)
   const state = proof?.proof ?? 'told'
   const by = proof && (page.names[proof.by] ?? labels.former).split(' ')[0]

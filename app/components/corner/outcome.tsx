@@ -9,10 +9,12 @@ interface OutcomeProps {
   /** Fresh id for what is sent from here. */
   operation: string
   closeTo: string
+  /** Takes the outcome off the page. */
+  dismiss: () => void
 }
 
 /** What became of the change that was just sent: done with its undo, refused, or two versions to choose from. */
-export function Outcome({ result, operation, closeTo }: OutcomeProps) {
+export function Outcome({ result, operation, closeTo, dismiss }: OutcomeProps) {
   if (result.kind === 'refused') return <Toast kind="danger">{result.words}</Toast>
   if (result.kind === 'done')
     return (
@@ -26,18 +28,12 @@ export function Outcome({ result, operation, closeTo }: OutcomeProps) {
         ) : null}
       </Toast>
     )
-  return <Conflict {...{ result, operation, closeTo }} />
+  return <Conflict {...{ result, operation, closeTo, dismiss }} />
 }
 
-function Conflict({
-  result,
-  operation,
-  closeTo,
-}: {
-  result: Extract<CornerResult, { kind: 'conflict' }>
-  operation: string
-  closeTo: string
-}) {
+type ConflictProps = OutcomeProps & { result: Extract<CornerResult, { kind: 'conflict' }> }
+
+function Conflict({ result, operation, closeTo, dismiss }: ConflictProps) {
   return (
     <div role="alert" className="conflict">
       <p>
@@ -47,7 +43,7 @@ function Conflict({
         <dt>{labels.theirs}</dt>
         <dd>{result.theirs}</dd>
         <dd>
-          <Link className="btn" to={closeTo} replace preventScrollReset>
+          <Link className="btn" to={closeTo} replace preventScrollReset onClick={dismiss}>
             {labels.keepTheirs}
           </Link>
         </dd>

@@ -24,7 +24,7 @@ describe('what became of a change, in words', () => {
   it('tells where the mark stands now and offers to take it back', () => {
     const done = intentResult(cut, asked, operation, { kind: 'applied', rev: 4, undo: operation }, sent)
     expect(done).toMatchObject({ kind: 'done', undo: 'op' })
-    expect(done.words).toBe('Build to: now 130\u00a0before on the real track.')
+    expect(done.words).toBe('Build to: now 130\u00a0before, car’s width off left edge, on the real track.')
   })
 
   it('shows both versions of just the fields that met, and a form that starts from theirs', () => {

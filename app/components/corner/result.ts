@@ -4,8 +4,8 @@ import { GROUNDS, type Ground } from '~/book/kinds'
 import type { Json, Operation, Outcome } from '~/book/operation'
 import type { MarkView } from '~/book/view'
 import { makeLapFrame } from '~/track/lap-frame'
-import { type Along, along, type Metres, metres } from '~/track/units'
-import { corner as words } from '~/words/corner'
+import { type Along, along, type Metres, metres, offset } from '~/track/units'
+import { acrossWords, corner as words } from '~/words/corner'
 import { mannerWord } from '~/words/kinds'
 import { formatGear, formatSpeed, formatToDatum } from '~/words/measures'
 import { markName } from './mark-words'
@@ -66,7 +66,10 @@ function doneWords(cut: CornerCut, name: string, asked: Asked, operation: Operat
   if (asked.intent === 'clear') return words.cleared(name, ground)
   const toDatum = toDatumOf(cut, operation.set[ground]?.to)
   if (toDatum === null) return words.changed(name)
-  return asked.intent === 'add' ? words.added(name, toDatum, ground) : words.moved(name, toDatum, ground)
+  const across = (operation.set[ground]?.to as { across?: number } | null | undefined)?.across ?? 0
+  if (asked.intent === 'add') return words.added(name, toDatum, ground)
+  const side = offset(across * (cut.layout.reversed ? -1 : 1))
+  return words.moved(name, toDatum, acrossWords(side, cut.layout.roadWidth, cut.car.width), ground)
 }
 
 /** Two versions of the fields that met: in words, and the form that would put one's own over theirs. */

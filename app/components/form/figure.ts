@@ -7,7 +7,7 @@ interface Figure {
   /** What to say of text that is no number. */
   wrong: string
   /** What to say of a number outside the limits. */
-  outside: string
+  outside: string | ((issue: { input?: unknown }) => string)
 }
 
 /** A number typed as text: digits with a decimal point or comma, blanks around it. Gives the number. */
@@ -17,7 +17,7 @@ export function figure({ limits: [least, most], missing, wrong, outside }: Figur
     .trim()
     .regex(/^[+\-−]?\d{1,9}(?:[.,]\d{0,9})?$/, wrong)
     .transform((text) => Number(text.replace(',', '.').replace('−', '-')))
-    .pipe(z.number().min(least, outside).max(most, outside))
+    .pipe(z.number().min(least, { error: outside }).max(most, { error: outside }))
 }
 
 /** A name as people give it: not empty, at most 80 letters. */
