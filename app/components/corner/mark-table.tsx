@@ -9,6 +9,7 @@ import { downBy, mannerWord, proofWord } from '~/words/kinds'
 import { againstSimulator, formatKmhFigure, formatNumber } from '~/words/measures'
 import { glyphForm, glyphKind, markName, shownProof } from './mark-words'
 import type { CornerPageData, LineData } from './page-data'
+import './mark-table.css'
 
 interface MarkTableProps {
   page: CornerPageData
