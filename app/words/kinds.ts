@@ -1,15 +1,4 @@
-import type {
-  BrakeRole,
-  ConditionKind,
-  Ground,
-  LandmarkKind,
-  Manner,
-  MarkKind,
-  Proof,
-  Role,
-  StretchKind,
-  TurnDirection,
-} from '~/book/kinds'
+import type { BrakeRole, ConditionKind, Ground, Manner, MarkKind, Proof, Role } from '~/book/kinds'
 
 /** The closed vocabularies of a book, in the words of drivers. */
 
@@ -63,47 +52,3 @@ export const conditionWord = (kind: ConditionKind): string => CONDITION_WORDS[ki
 
 const ROLE_WORDS: Record<Role, string> = { manager: 'manager', coach: 'coach', driver: 'driver' }
 export const roleWord = (role: Role): string => ROLE_WORDS[role]
-
-const TURN_WORDS: Record<TurnDirection, string> = { left: 'left', right: 'right' }
-export const turnWord = (direction: TurnDirection): string => TURN_WORDS[direction]
-
-const LANDMARKS: Record<LandmarkKind, string> = {
-  kerb: 'kerb',
-  'distance-board': 'distance board',
-  'marshal-post': 'marshal post',
-  'light-panel': 'light panel',
-  sign: 'sign',
-  gantry: 'gantry',
-  bridge: 'bridge',
-  wall: 'wall',
-  'wall-end': 'end of the wall',
-  'tyre-wall': 'tyre wall',
-  'tyre-bundle': 'tyre bundle',
-  bales: 'bales',
-  cone: 'cone',
-  'marker-post': 'marker post',
-  line: 'line',
-  seam: 'seam',
-  patch: 'patch',
-  bump: 'bump',
-  drain: 'drain',
-  'standing-water': 'standing water',
-  building: 'building',
-  mast: 'mast',
-  'timing-line': 'timing line',
-  'safety-car-line': 'safety-car line',
-  'pit-entry-line': 'pit entry line',
-  'pit-exit-line': 'pit exit line',
-  'pit-speed-line': 'pit speed line',
-}
-export const landmarkWord = (kind: LandmarkKind): string => LANDMARKS[kind]
-
-const STRETCHES: Record<StretchKind, string> = {
-  surface: 'surface',
-  grip: 'grip',
-  camber: 'camber',
-  height: 'height',
-  drainage: 'drainage',
-  'layout-part': 'part of the layout',
-}
-export const stretchWord = (kind: StretchKind): string => STRETCHES[kind]

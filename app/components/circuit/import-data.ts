@@ -12,7 +12,7 @@ const rounded = ([lon, lat, height]: Position): Position =>
 const degree = (value: number) => Math.round(value * 1e7) / 1e7
 
 /** What the page of a circuit on its way in is given. */
-export function pageOf(draft: LayoutDraft, choices: ImportChoices): ImportPageData {
+export function pageOf(draft: LayoutDraft, choices: ImportChoices, sheet: number): ImportPageData {
   const { reading } = draft
   const { startAlong, reversed } = choices
   return {
@@ -28,6 +28,7 @@ export function pageOf(draft: LayoutDraft, choices: ImportChoices): ImportPageDa
       : null,
     anchored: choices.anchor !== null,
     zones: Intl.supportedValuesOf('timeZone'),
+    sheet,
   }
 }
 

@@ -35,6 +35,8 @@ export interface ImportPageData {
   /** The file is in metres, and was given its place on the globe. */
   anchored: boolean
   zones: readonly string[]
+  /** Width in px that the server draws for. */
+  sheet: number
 }
 
 interface ImportPageProps {
@@ -111,7 +113,7 @@ function ReadLayout({
           road={road}
           title={page.fields.name || words.title}
           corners={named}
-          width={780}
+          width={page.sheet}
           onStartMove={moveStart}
         />
         <Part title={words.asRead}>
@@ -121,22 +123,36 @@ function ReadLayout({
         </Part>
         <Warnings warnings={page.warnings} />
       </div>
-      <div className="grid content-start gap-7">
-        <Part title={words.way}>
-          <StartFields fields={fields} corners={named} />
-        </Part>
-        <Part title={words.corners} lead={corners.length > 0 ? words.cornersLead : words.noCorners}>
-          {corners.length > 0 && <CornerPicks field={fields.corners} corners={corners} />}
-        </Part>
-        <Part title={words.settings}>
-          <CircuitFields fields={fields} zones={page.zones} />
-        </Part>
-        <div className="flex flex-wrap gap-2.5">
-          <Button look="primary" size="large" name="intent" value="save">
-            {words.save}
-          </Button>
-          <GiveUp />
-        </div>
+      <Settings page={page} corners={corners} named={named} fields={fields} />
+    </div>
+  )
+}
+
+interface SettingsProps {
+  page: ImportPageData
+  corners: readonly DraftCorner[]
+  named: readonly { key: string; number: string; name: string }[]
+  fields: Fields
+}
+
+/** What a person settles of a line that was read: how it is driven, its corners, what it is called. */
+function Settings({ page, corners, named, fields }: SettingsProps) {
+  return (
+    <div className="grid content-start gap-7">
+      <Part title={words.way}>
+        <StartFields fields={fields} corners={named} />
+      </Part>
+      <Part title={words.corners} lead={corners.length > 0 ? words.cornersLead : words.noCorners}>
+        {corners.length > 0 && <CornerPicks field={fields.corners} corners={corners} />}
+      </Part>
+      <Part title={words.settings}>
+        <CircuitFields fields={fields} zones={page.zones} />
+      </Part>
+      <div className="flex flex-wrap gap-2.5">
+        <Button look="primary" size="large" name="intent" value="save">
+          {words.save}
+        </Button>
+        <GiveUp />
       </div>
     </div>
   )

@@ -28,7 +28,6 @@ export const cornersSchema = z.object({
   skip: z.uuid().optional(),
   corners: z.array(row).default([]).superRefine(checkNumbers),
 })
-export type CornersForm = z.output<typeof cornersSchema>
 
 const seen = {
   seenStart: z.coerce.number(),

@@ -13,6 +13,7 @@ import { dropImport, readImport, setImportOptions } from '~/db/imports.server'
 import { dbContext } from '~/middleware/context'
 import { readForm } from '~/middleware/read-form.server'
 import { allow, refusal, refusalOf } from '~/middleware/refusal.server'
+import { sheetWidth } from '~/middleware/sheet-width.server'
 import { teamContext } from '~/middleware/team.server'
 import { choicesFrom } from '~/track/import-choices-schema'
 import { readDraft } from '~/track/layout-draft'
@@ -37,7 +38,7 @@ async function draftOf({ params, context }: Pick<Route.LoaderArgs, 'params' | 'c
 
 export async function loader(args: Route.LoaderArgs) {
   const { team, kept, choices, draft } = await draftOf(args)
-  return { team: team.name, fileName: kept.fileName, page: pageOf(draft, choices) }
+  return { team: team.name, fileName: kept.fileName, page: pageOf(draft, choices, sheetWidth(args.request)) }
 }
 
 /** Takes one step. What was typed for the others is kept with it. */
