@@ -2,9 +2,12 @@ import { createRequestHandler } from '@react-router/express'
 import compression from 'compression'
 import express, { type Response } from 'express'
 import { RouterContextProvider, type ServerBuild } from 'react-router'
+import { sweepSessions } from '~/auth/sessions.server'
 import { db, pool } from '~/db/client.server'
+import { sweepImports } from '~/db/imports.server'
 import { ping } from '~/db/ping.server'
 import { env } from '~/env.server'
+import { errorEntry } from '~/error-entry.server'
 import { listen } from '~/listen.server'
 import { log } from '~/log.server'
 import { limitBody } from '~/middleware/body-limit.server'
@@ -23,6 +26,7 @@ import { sameOrigin } from '~/middleware/same-origin.server'
 import { securityHeaders } from '~/middleware/security-headers.server'
 import { staticFiles } from '~/middleware/static-files.server'
 import { wholeAddress } from '~/middleware/whole-address.server'
+import { startSweeps } from '~/sweeps.server'
 
 const production = import.meta.env.PROD
 let draining = false
@@ -45,6 +49,18 @@ function contextOf(response: Response): RouterContextProvider {
   return context
 }
 
+async function makeHandler() {
+  const mode = production ? 'production' : 'development'
+  return createRequestHandler({
+    build: await pages(),
+    mode,
+    getLoadContext: (_request, response) => contextOf(response),
+  })
+}
+
+/** Made once, since making it works through all routes; in development anew for each request, as the routes may have changed. */
+const handler = production ? makeHandler() : undefined
+
 /** The web server. It holds no state: any number of processes may serve side by side. */
 export const app = express()
 app.disable('x-powered-by')
@@ -58,15 +74,25 @@ app.use(requestLog(log))
 app.use(securityHeaders({ publicUrl: env.PUBLIC_URL, production }))
 app.get('/ready', async (_request, response) => {
   const ok = !draining && (await ping())
-  response.status(ok ? 200 : 503).json({ ok })
+  response
+    .set('Cache-Control', 'no-store')
+    .status(ok ? 200 : 503)
+    .json({ ok })
 })
 app.use(compression())
 if (production) app.use(staticFiles())
 app.use(wholeAddress, sameOrigin(env.PUBLIC_URL), limitBody)
-app.use(createRequestHandler({ build: pages, getLoadContext: (_request, response) => contextOf(response) }))
+app.use(async (request, response, next) => (await (handler ?? makeHandler()))(request, response, next))
 app.use(lastResort(log))
 
 if (production) {
+  const stopSweeps = startSweeps(
+    [
+      { name: 'drafts of imports', run: () => sweepImports(db, new Date()) },
+      { name: 'sessions', run: sweepSessions },
+    ],
+    { onError: (sweep, error) => log.error({ sweep, ...errorEntry(error) }, 'sweep failed') },
+  )
   listen(app, {
     port: env.PORT,
     host: env.HOST,
@@ -74,6 +100,9 @@ if (production) {
     onStop: () => {
       draining = true
     },
-    release: () => pool.end(),
+    release: async () => {
+      await stopSweeps()
+      await pool.end()
+    },
   })
 }

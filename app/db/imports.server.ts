@@ -1,7 +1,7 @@
-import { and, eq, lt, type SQL } from 'drizzle-orm'
+import { and, desc, eq, inArray, lt, type SQL } from 'drizzle-orm'
 import type { Actor } from '~/book/actions'
 import type { Json } from '~/book/operation'
-import { commander, type Declined } from './command'
+import { commander, type Declined, type Member } from './command'
 import type { Db } from './database'
 import { ownTeam, personOf } from './own-team'
 import { IMPORT_BYTES, imports } from './schema'
@@ -19,13 +19,15 @@ export interface ImportDraft {
 /** How long a draft waits for its uploader to come back. */
 export const DRAFT_DAYS = 1
 const DAY_MS = 86_400_000
+/** How many drafts of one person a team keeps: the latest. */
+export const DRAFTS_KEPT = 5
 
 const isOwn = (actor: Actor, id: string): SQL | undefined => {
   const person = personOf(actor)
   return and(ownTeam(actor, imports.teamId), eq(imports.id, id), person ? eq(imports.personId, person) : undefined)
 }
 
-/** Keeps an uploaded file. The same id again keeps what is there. */
+/** Keeps an uploaded file, and of the person's older ones the latest few. The same id again keeps what is there. */
 export async function putImport(db: Db, actor: Actor, draft: ImportDraft): Promise<{ kind: 'kept' } | Declined> {
   const asked = await commander(db, actor, 'circuit.change')
   if (asked.kind !== 'member') return asked
@@ -39,7 +41,19 @@ export async function putImport(db: Db, actor: Actor, draft: ImportDraft): Promi
     .insert(imports)
     .values({ teamId: team, id, personId: person, fileName, bytes, options })
     .onConflictDoNothing()
+  await dropOlder(db, asked.member)
   return { kind: 'kept' }
+}
+
+async function dropOlder(db: Db, { team, person }: Member): Promise<void> {
+  const own = and(eq(imports.teamId, team), eq(imports.personId, person))
+  const older = db
+    .select({ id: imports.id })
+    .from(imports)
+    .where(own)
+    .orderBy(desc(imports.createdAt), desc(imports.id))
+    .offset(DRAFTS_KEPT)
+  await db.delete(imports).where(and(own, inArray(imports.id, older)))
 }
 
 /** The actor's own draft, or null. */

@@ -3,7 +3,7 @@ import type { BookId, CarId, LayoutId } from '~/book/ids'
 import { makeBook } from '~/db/books.server'
 import { addCar, changeCar, readCars } from '~/db/cars.server'
 import { importCircuit, type NewCircuit } from '~/db/circuits.server'
-import { dropImport, putImport, readImport, setImportOptions, sweepImports } from '~/db/imports.server'
+import { DRAFTS_KEPT, dropImport, putImport, readImport, setImportOptions, sweepImports } from '~/db/imports.server'
 import { readBooks } from '~/db/read-books.server'
 import { readChanges } from '~/db/read-changes.server'
 import { readCircuit, readCircuits } from '~/db/read-circuits.server'
@@ -36,7 +36,7 @@ describe('a circuit that is brought in', () => {
     expect(outcome).toMatchObject({ kind: 'invalid', problems: [{ code: 'taken' }] })
     const bad = await importCircuit(db, own.coach, circuit([corner('1', 200), corner('Two', 500)]))
     expect(bad).toMatchObject({ kind: 'invalid', problems: [{ field: 'corners.Two.number' }] })
-    expect(await readCircuits(db, own.coach)).toEqual([])
+    expect(await readCircuits(db, own.coach)).toEqual({ entries: [], goesOn: false })
     const { rows } = await pool.query('select count(*)::int as rows from centrelines where team_id = $1', [own.id])
     expect(rows).toEqual([{ rows: 0 }])
   })
@@ -56,7 +56,7 @@ describe('a circuit that is brought in', () => {
     const drawn = circuit()
     const outcomes = await Promise.all([1, 2, 3].map(() => importCircuit(db, own.coach, drawn)))
     expect(new Set(outcomes.map((outcome) => JSON.stringify(outcome))).size).toBe(1)
-    expect(await readCircuits(db, own.coach)).toHaveLength(1)
+    expect((await readCircuits(db, own.coach)).entries).toHaveLength(1)
   })
 
   test.each<[string, (drawn: NewCircuit) => NewCircuit]>([
@@ -76,7 +76,8 @@ describe('a circuit that is brought in', () => {
     const again = { ...circuit(), positions: drawn.positions }
     expect(await importCircuit(db, own.coach, drawn)).toMatchObject({ slug: 'sandbar' })
     expect(await importCircuit(db, own.coach, again)).toMatchObject({ slug: 'sandbar-2' })
-    const hashes = (await readCircuits(db, own.coach)).map(({ layout }) => layout.centreline)
+    const reads = ['sandbar', 'sandbar-2'].map((slug) => readCircuit(db, own.coach, slug))
+    const hashes = (await Promise.all(reads)).map((read) => read?.layout.centreline)
     expect(new Set(hashes).size).toBe(1)
   })
 })
@@ -152,6 +153,16 @@ describe('cars', () => {
 describe('a draft of an import', () => {
   const bytes = new Uint8Array([0, 255, 60, 103, 112, 120])
   const draft = () => ({ id: newId<string>(), fileName: 'lap 3.gpx', bytes, options: { reversed: false } })
+
+  test('is one of the latest few of its person; nobody else’s go', async () => {
+    const own = await makeTeam()
+    const [mine, others] = [Array.from({ length: DRAFTS_KEPT + 2 }, draft), draft()]
+    await putImport(db, own.manager, others)
+    for (const one of mine) expect(await putImport(db, own.coach, one)).toEqual({ kind: 'kept' })
+    const kept = await Promise.all(mine.map(({ id }) => readImport(db, own.coach, id)))
+    expect(kept.map((one) => one !== null)).toEqual(mine.map((_, at) => at >= 2))
+    expect((await readImport(db, own.manager, others.id))?.id).toBe(others.id)
+  })
 
   test('keeps bytes and choices for its uploader alone', async () => {
     const own = draft()
