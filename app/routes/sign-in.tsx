@@ -40,7 +40,7 @@ export default function SignInPage({ loaderData, actionData }: Route.ComponentPr
   return (
     <OutsideFrame>
       <main className="mx-auto w-full max-w-[366px] px-4 pt-6 pb-11">
-        <SignInForm lastResult={actionData} next={loaderData.next} />
+        <SignInForm heading="h1" lastResult={actionData} next={loaderData.next} />
       </main>
     </OutsideFrame>
   )

@@ -11,9 +11,12 @@ import { signInSchema } from './schema'
 export function SignInForm({
   lastResult,
   next,
+  heading: Heading = 'h2',
 }: {
   lastResult?: SubmissionResult<string[]> | null
   next?: string | null
+  /** The page's first heading where nothing else is on it. */
+  heading?: 'h1' | 'h2'
 }) {
   const [form, fields] = useForm({
     id: 'sign-in',
@@ -29,7 +32,7 @@ export function SignInForm({
       {...getFormProps(form)}
       className="rounded-lg border border-rule-strong bg-surface px-[18px] py-3.5"
     >
-      <h2 className="h2">{words.title}</h2>
+      <Heading className="h2">{words.title}</Heading>
       <FormErrors form={form} />
       <div className="mt-2 grid gap-2.5">
         <TextField field={fields.email} type="email" label={words.email} autoComplete="username" />
