@@ -1,4 +1,15 @@
-import { type Across, type Along, across, along, type Metres, metres, type Offset, offset, type Station, station } from './units'
+import {
+  type Across,
+  type Along,
+  across,
+  along,
+  type Metres,
+  metres,
+  type Offset,
+  offset,
+  type Station,
+  station,
+} from './units'
 
 /** The lap as it is driven, over a line as it was drawn. Needs no positions: only the line's length. */
 export interface LapFrame {

@@ -32,7 +32,10 @@ export function CarTable({ cars, changePath }: CarTableProps) {
           <tr key={car.id}>
             <th scope="row" className="wrap-anywhere">
               {changePath ? (
-                <Link className="inline-flex min-h-11 underline items-center min-[800px]:min-h-0" to={changePath(car.id)}>
+                <Link
+                  className="inline-flex min-h-11 underline items-center min-[800px]:min-h-0"
+                  to={changePath(car.id)}
+                >
                   {car.name}
                 </Link>
               ) : (
