@@ -193,7 +193,7 @@ function noteShapes(notes: readonly HeightNote[], profile: HeightProfile, frame:
     const width = textWidth(said, style, size)
     const box = notePlaces(note, frame, { width, height: size }).find(
       (place) =>
-        place.x >= 2 &&
+        place.x >= frame.left &&
         place.x + width <= frame.right &&
         !taken.some((other) => overlap(other, place, 3)) &&
         !line.some(
@@ -216,7 +216,7 @@ function notePlaces(note: HeightNote, { x, y, left }: Frame, size: { width: numb
   if (note.code === 'down') return [8, 20, 34].map((off) => ({ x: at[0] + off, y: at[1] - size.height, ...size }))
   return [
     middle,
-    ...[-1, 1].map((side) => ({ ...middle, x: middle.x + side * size.width * 0.5 })),
+    ...[-0.1, -0.2, 0.2, -0.5, 0.5].map((share) => ({ ...middle, x: middle.x + share * size.width })),
     { ...middle, y: over - 6 },
   ]
 }
