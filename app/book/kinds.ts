@@ -92,4 +92,3 @@ export type Role = (typeof ROLES)[number]
 
 /** A thing's life. `null` in an operation means: does not exist yet. A merged corner points to the one that took it in. */
 export const STATES = ['live', 'dropped', 'merged', 'archived'] as const
-export type State = (typeof STATES)[number]
