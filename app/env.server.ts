@@ -4,7 +4,6 @@ const publicUrl = z.url({ protocol: /^https?$/ }).transform((text) => new URL(te
 
 const schema = z
   .object({
-    NODE_ENV: z.enum(['production', 'development', 'test']).default('development'),
     HOST: z.string().min(1).optional(),
     PORT: z.coerce.number().int().min(1).max(65_535).default(3000),
     PUBLIC_URL: publicUrl.optional(),
