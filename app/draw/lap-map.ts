@@ -75,7 +75,8 @@ export function lapMap(input: LapMapInput): LapMap {
 
 /**
  * Plates and names first, then the cartouche in the emptiest part left; where that leaves it none, the cartouche first and
- * the plates round it; and where the lap fills the sheet, the map moves up and leaves it a band below.
+ * the plates round it, as long as that costs no corner its name; and where the lap fills the sheet, the map moves up and
+ * leaves it a band below.
  */
 function arranged(input: LapMapInput, lap: readonly PlanePoint[], waters: readonly Water[]) {
   const reader: Reader = input.width < PHONE_UNDER ? 'phone' : 'desk'
@@ -85,9 +86,11 @@ function arranged(input: LapMapInput, lap: readonly PlanePoint[], waters: readon
   const after = setNames(first, input, waters, reader)
   const left = emptiestPlace(sheet, { ...after.room, boxes: [...after.room.boxes, ...first.built] })
   if (left) return { ...after, reader, sheet, place: left, projection: first.projection }
-  const before = emptiestPlace(sheet, { ...withShores(first, waters), boxes: [...first.built, ...first.bends] })
-  if (before) {
+  for (const kept of [first.bends, []]) {
+    const before = emptiestPlace(sheet, { ...withShores(first, waters), boxes: [...first.built, ...kept] })
+    if (!before) continue
     const round = setNames(first, input, waters, reader, [{ x: before[0], y: before[1], ...sheet }])
+    if (namedIn(round.plates) < namedIn(after.plates)) continue
     return { ...round, reader, sheet, place: before, projection: first.projection }
   }
   const band = makeTable(input, lap, waters, reader, sheet.height + EDGE)
@@ -95,6 +98,8 @@ function arranged(input: LapMapInput, lap: readonly PlanePoint[], waters: readon
   const place: Point = [EDGE, input.height - smaller.height - EDGE]
   return { ...setNames(band, input, waters, reader), reader, sheet: smaller, place, projection: band.projection }
 }
+
+const namedIn = (plates: readonly Plate[]) => plates.filter(({ named }) => named).length
 
 type Table = ReturnType<typeof makeTable>
 

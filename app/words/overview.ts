@@ -95,11 +95,15 @@ function heightNote(note: HeightNote): string {
   }
 }
 
+/** What the drawing of a lap's heights says. */
 export const heightWords: HeightWords = {
   metres: (value) => formatMetres(metres(value)),
   lap: 'one lap, start line to start line',
   note: heightNote,
 }
+
+/** The same where there is no room for more. */
+export const shortHeightWords: HeightWords = { ...heightWords, lap: 'one lap' }
 
 export const overviewWords = {
   corners: 'Corners',

@@ -23,6 +23,7 @@ import {
   mapLabel,
   overviewWords,
   plateLabel,
+  shortHeightWords,
 } from '~/words/overview'
 
 interface LapSheetProps {
@@ -47,9 +48,12 @@ export function LapSheet(props: LapSheetProps) {
   )
 }
 
+/** A drawing narrower than this is a phone's. */
+const PHONE_UNDER = 600
+
 /** Height of the map for its width: a phone's is squarer. */
-const mapHeight = (width: number) => Math.round(width * (width < 600 ? 1 : 656 / 956))
-const heightsHeight = (width: number) => (width < 600 ? 176 : 191)
+const mapHeight = (width: number) => Math.round(width * (width < PHONE_UNDER ? 1 : 656 / 956))
+const heightsHeight = (width: number) => (width < PHONE_UNDER ? 176 : 191)
 
 /** Measures itself: a width that came from outside would take the server's drawing away before the geometry is there. */
 function LapDrawings({ overview, team, search, sheet }: LapSheetProps) {
@@ -113,10 +117,10 @@ function MapDrawing({ overview, road, ground, corners, width }: MapDrawingProps)
 }
 
 function HeightsDrawing({ road, corners, width }: Pick<MapDrawingProps, 'road' | 'corners' | 'width'>) {
-  const list = useMemo(
-    () => lapHeights({ road, corners, width, height: heightsHeight(width), words: heightWords }),
-    [road, corners, width],
-  )
+  const list = useMemo(() => {
+    const words = width < PHONE_UNDER ? shortHeightWords : heightWords
+    return lapHeights({ road, corners, width, height: heightsHeight(width), words })
+  }, [road, corners, width])
   return (
     <div className="lap-heights">
       {list ? (
