@@ -3,7 +3,7 @@ import { expect, type Page, test } from '@playwright/test'
 import { openPages, overflow, teamPages } from './support/pages'
 import { signIn } from './support/people'
 
-test.setTimeout(300_000)
+test.setTimeout(600_000)
 
 const sizes = { desktop: { width: 1440, height: 900 }, phone: { width: 390, height: 844 } }
 
