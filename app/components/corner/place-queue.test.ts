@@ -4,6 +4,7 @@ import type { OperationId } from '~/book/ids'
 import { offset, station } from '~/track/units'
 import {
   answered,
+  isUnderWay,
   letGo,
   nextMove,
   type PlaceMove,
@@ -42,6 +43,12 @@ describe('moves on the map, in order', () => {
     const waiting = letGo([move('a', 'apex', 10, 'held'), move('b', 'turnin', 20, 'held')])
     expect(nextMove(waiting)?.id).toBe('a')
     expect(nextMove(withState(waiting, 'a' as OperationId, 'sending', null))).toBeNull()
+  })
+
+  it('holds the page while something is in the hand or on its way, not for what is answered or cannot be sent', () => {
+    const under = (state: PlaceMove['state']) => isUnderWay([move('a', 'apex', 10, state)])
+    expect((['held', 'waiting', 'sending'] as const).map(under)).toEqual([true, true, true])
+    expect((['settled', 'unsent'] as const).map(under)).toEqual([false, false])
   })
 
   it('keeps what could not be sent until it is sent again', () => {

@@ -18,7 +18,8 @@ export interface PlaceMove {
   at: GivenPlace
   /** The corner it was moved in, which may not be the one that is open when it is sent. */
   cut: CornerCut
-  state: 'held' | 'waiting' | 'sending' | 'unsent'
+  /** `settled`: answered, and shown here until the page has read it. */
+  state: 'held' | 'waiting' | 'sending' | 'unsent' | 'settled'
   /** Made when it is first sent, and sent again as it was. */
   operation: Operation | null
 }
@@ -42,7 +43,7 @@ export const letGo = (queue: PlaceQueue): PlaceQueue =>
 
 /** The next to send: one at a time, and none past a move that could not be sent. */
 export function nextMove(queue: PlaceQueue): PlaceMove | null {
-  if (queue.some((one) => one.state === 'sending' || one.state === 'unsent')) return null
+  if (queue.some(({ state }) => state === 'sending' || state === 'unsent' || state === 'settled')) return null
   return queue.find((one) => one.state === 'waiting') ?? null
 }
 
@@ -54,6 +55,10 @@ export const withState = (
 ): PlaceQueue => queue.map((one) => (one.id === id ? { ...one, state, operation } : one))
 
 export const answered = (queue: PlaceQueue, id: OperationId): PlaceQueue => queue.filter((one) => one.id !== id)
+
+/** Whether something is in the hand or on its way, so that the page must not be left. */
+export const isUnderWay = (queue: PlaceQueue) =>
+  queue.some(({ state }) => state === 'held' || state === 'waiting' || state === 'sending')
 
 /** What could not be sent waits again. */
 export const sendAgain = (queue: PlaceQueue): PlaceQueue =>

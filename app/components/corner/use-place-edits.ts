@@ -1,5 +1,5 @@
 import { useCallback, useEffect, useRef, useState } from 'react'
-import { href, useBlocker, useRevalidator } from 'react-router'
+import { href, type Location, useBlocker, useNavigate, useRevalidator } from 'react-router'
 import { v7 } from 'uuid'
 import { changeMark, type GivenPlace, type SeenMark } from '~/book/edits'
 import type { OperationId } from '~/book/ids'
@@ -12,6 +12,7 @@ import { corner as words } from '~/words/corner'
 import type { CornerPageData } from './page-data'
 import {
   answered,
+  isUnderWay,
   letGo,
   nextMove,
   type PlaceMove,
@@ -95,6 +96,7 @@ function useSending({ page, frame, queue, setQueue, onResult }: Sending) {
       const stored = operation.set[move.ground]?.to
       if (stored && outcome.kind === 'applied')
         known.current.set(placeKey(move), { place: stored as unknown as Place, rev: outcome.rev })
+      setQueue((before) => withState(before, move.id, 'settled', operation))
       onResult(resultOf(move, operation, outcome, frame))
       await revalidate()
       setQueue((before) => answered(before, move.id))
@@ -113,14 +115,23 @@ function useSending({ page, frame, queue, setQueue, onResult }: Sending) {
   }, [queue, frame, page.team, send, setQueue])
 }
 
-/** Going elsewhere waits until what is under way has been answered; closing the window with something unsent asks first. */
+/**
+ * Going elsewhere waits until what is under way has been answered; closing the window with something unsent asks first. The
+ * way is taken anew, not resumed: reading the page again meanwhile makes the router forget what it held back.
+ */
 function useStaying(queue: PlaceQueue) {
-  const isUnderWay = queue.some((one) => one.state !== 'unsent')
-  const blocker = useBlocker(isUnderWay)
+  const stays = isUnderWay(queue)
+  const navigate = useNavigate()
+  const blocker = useBlocker(stays)
+  const to = useRef<Location | null>(null)
   useEffect(() => {
-    if (blocker.state === 'blocked' && !isUnderWay) blocker.proceed()
-  }, [blocker, isUnderWay])
-  const isUnsent = queue.length > 0
+    if (blocker.state === 'blocked') to.current = blocker.location
+    if (stays || !to.current) return
+    const next = to.current
+    to.current = null
+    navigate(next)
+  }, [blocker, stays, navigate])
+  const isUnsent = queue.some((one) => one.state !== 'settled')
   useEffect(() => {
     if (!isUnsent) return
     const ask = (event: BeforeUnloadEvent) => event.preventDefault()
