@@ -18,12 +18,17 @@ export async function seedDemo(env) {
   })
 }
 
-/** Makes the demo once for each database, and again where its password changed. */
-export async function ensureDemo(env) {
-  const given = createHash('sha256').update(`${env.OWNER_DATABASE_URL}\0${env.DEMO_PASSWORD}`).digest('hex')
-  if (existsSync(stamp) && readFileSync(stamp, 'utf8') === given) return 'present'
+const loopback = /^(localhost|127\.\d+\.\d+\.\d+|\[::1\]|)$/
+
+/** Whether people with a known password may go into this database: it is on this machine, or the password was asked for. */
+export const mayHoldDemo = (url) => loopback.test(new URL(url).hostname) || Boolean(process.env.DEMO_PASSWORD)
+
+/** Makes the demo in the private cluster, once, and again where its password changed; in another database at each start. */
+export async function ensureDemo(env, ownCluster) {
+  const given = createHash('sha256').update(env.DEMO_PASSWORD).digest('hex')
+  if (ownCluster && existsSync(stamp) && readFileSync(stamp, 'utf8') === given) return 'present'
   await seedDemo(env)
-  writeFileSync(stamp, given)
+  if (ownCluster) writeFileSync(stamp, given)
   return 'made'
 }
 

@@ -5,7 +5,7 @@ import { Cluster } from './cluster.mjs'
 import { must } from './command.mjs'
 import { ensureDatabase } from './database.mjs'
 import { ensurePackages } from './debian.mjs'
-import { demoPassword, ensureDemo } from './demo.mjs'
+import { demoPassword, ensureDemo, mayHoldDemo } from './demo.mjs'
 import { ensureDependencies } from './dependencies.mjs'
 import { alone, atEnd, joinRuns, leaveRuns } from './lifetime.mjs'
 import { makeFolders, root, stateFolder } from './places.mjs'
@@ -64,22 +64,30 @@ export async function migrate(env) {
   })
 }
 
+/** Puts the demo in, where it may be. @returns {Promise<string | undefined>} the password of its people */
+async function demo({ appUrl, ownerUrl }, ownCluster) {
+  const password = demoPassword()
+  const env = { DATABASE_URL: appUrl, OWNER_DATABASE_URL: ownerUrl, DEMO_PASSWORD: password }
+  const may = mayHoldDemo(ownerUrl)
+  await step('Demo', () => (may ? ensureDemo(env, ownCluster) : 'left out, the database is not on this machine'))
+  return may ? password : undefined
+}
+
 /**
  * Does all that must be done before the web server starts.
  *
- * @returns {Promise<{ env: Record<string, string>, password: string }>} the server's environment, and the demo's password
+ * @returns {Promise<{ env: Record<string, string | undefined>, password?: string }>} the server's environment, and the
+ *   password of the demo's people where there is a demo
  */
 export function prepare() {
   prepareFolders()
   return alone(async () => {
     const ownCluster = !process.env.DATABASE_URL
     await prepareTools(ownCluster ? ['postgresql'] : [])
-    const { appUrl, ownerUrl } = await databaseUrls()
+    const urls = await databaseUrls()
     await step('Build', ensureBuild)
-    const password = demoPassword()
-    const env = { DATABASE_URL: appUrl, OWNER_DATABASE_URL: ownerUrl, DEMO_PASSWORD: password }
-    await step('Migrations', () => migrate(env))
-    await step('Demo', () => ensureDemo(env))
-    return { env: { DATABASE_URL: appUrl, OWNER_DATABASE_URL: undefined, DEMO_PASSWORD: undefined }, password }
+    await step('Migrations', () => migrate({ DATABASE_URL: urls.appUrl, OWNER_DATABASE_URL: urls.ownerUrl }))
+    const password = await demo(urls, ownCluster)
+    return { env: { DATABASE_URL: urls.appUrl, OWNER_DATABASE_URL: undefined, DEMO_PASSWORD: undefined }, password }
   })
 }

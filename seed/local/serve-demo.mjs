@@ -5,6 +5,12 @@ import { webPort } from './ports.mjs'
 import { prepare } from './prepare.mjs'
 import { step } from './steps.mjs'
 
+/** What to put into an address to reach a server that listens on HOST. */
+function reachable(host) {
+  if (!host || host === '0.0.0.0' || host === '::') return 'localhost'
+  return host.includes(':') ? `[${host}]` : host
+}
+
 /**
  * Prepares, starts the web server, tells its address and the demo's sign-ins, and serves until it is stopped.
  *
@@ -16,10 +22,11 @@ export function serveDemo({ command, server, env }) {
     const port = await webPort(command)
     const prepared = await prepare()
     const web = startProcess(server, { ...prepared.env, ...env, PORT: String(port) })
-    const host = process.env.HOST || 'localhost'
-    await step('Web server', () => untilHealthy(`http://${host}:${port}`, web))
-    console.log(`\nTurnstone: ${process.env.PUBLIC_URL || `http://${host}:${port}`}\n`)
-    console.log(['Sign in as', ...signIns(prepared.password), '', 'Ctrl-C stops all of it.'].join('\n'))
+    const address = `http://${reachable(process.env.HOST)}:${port}`
+    await step('Web server', () => untilHealthy(address, web))
+    const signingIn = prepared.password === undefined ? [] : ['Sign in as', ...signIns(prepared.password), '']
+    const told = ['', `Turnstone: ${process.env.PUBLIC_URL || address}`, '', ...signingIn, 'Ctrl-C stops all of it.']
+    console.log(told.join('\n'))
     return (await web.ended) || 1
   })
 }
