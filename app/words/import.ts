@@ -23,6 +23,7 @@ export const importWords = {
   name: 'Name of the circuit',
   nameHint: 'Left empty: the name in the file.',
   read: 'Read the file',
+  reading: 'Reading the file',
   cancel: 'Give it up',
   draft: (file: string) => `Read from ${file}`,
   notRead: 'It cannot be read as it is.',

@@ -29,7 +29,7 @@ export function CornerPicks({ field, corners }: CornerPicksProps) {
             <th scope="col">{columns.keep}</th>
             <th scope="col">{columns.number}</th>
             <th scope="col">{columns.name}</th>
-            <th scope="col" className="max-[420px]:sr-only">
+            <th scope="col" className="max-[420px]:hidden">
               {columns.turn}
             </th>
             <th scope="col" className="r">

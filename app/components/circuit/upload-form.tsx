@@ -1,6 +1,6 @@
 import { getFormProps, type SubmissionResult, useForm } from '@conform-to/react'
 import { parseWithZod } from '@conform-to/zod/v4'
-import { Form, Link } from 'react-router'
+import { Form, Link, useNavigation } from 'react-router'
 import { FileField, TextField } from '~/components/form/field'
 import { FormErrors } from '~/components/form/form-errors'
 import { Button } from '~/components/ui/button'
@@ -22,13 +22,16 @@ export function UploadForm({ lastResult, listPath }: UploadFormProps) {
     onValidate: ({ formData }) => parseWithZod(formData, { schema: uploadSchema }),
     shouldRevalidate: 'onInput',
   })
+  const reading = useNavigation().state === 'submitting'
   return (
     <Form method="post" encType="multipart/form-data" {...getFormProps(form)} className="grid gap-4">
       <FormErrors form={form} />
       <TextField field={fields.name} label={words.name} hint={words.nameHint} autoComplete="off" />
       <FileField field={fields.file} label={words.file} hint={words.fileHint} accept={TYPES} />
       <div className="flex flex-wrap gap-2.5">
-        <Button look="primary">{words.read}</Button>
+        <Button look="primary" aria-disabled={reading}>
+          {reading ? words.reading : words.read}
+        </Button>
         <Link className="btn btn-quiet" to={listPath}>
           {words.cancel}
         </Link>
