@@ -1,6 +1,6 @@
 import type { SubmissionResult } from '@conform-to/react'
 import { Suspense, useCallback, useEffect, useState } from 'react'
-import { Link, useNavigate, useSearchParams } from 'react-router'
+import { Link, useNavigate, useNavigation, useSearchParams } from 'react-router'
 import { GROUNDS, type Ground } from '~/book/kinds'
 import { DrawingBoundary } from '~/components/geometry/drawing-boundary'
 import { Icon } from '~/components/ui/icon'
@@ -76,12 +76,13 @@ function useLatest(corner: string, result: CornerResult | null) {
   return { latest: shown.fromMap ?? shown.fromForm, setFromMap, dismiss }
 }
 
-/** A form whose change is done is closed. */
+/** A form whose change is done is closed, once the page has been read again: closing earlier would keep it as it was. */
 function useClosing(result: CornerResult | null, closeTo: string) {
   const navigate = useNavigate()
   const [search] = useSearchParams()
   const isOpen = search.has('add') || search.has('mark')
-  const isDone = result?.kind === 'done'
+  const isRead = useNavigation().state === 'idle'
+  const isDone = result?.kind === 'done' && isRead
   useEffect(() => {
     if (isDone && isOpen) navigate(closeTo, { preventScrollReset: true, replace: true })
   }, [isDone, isOpen, closeTo, navigate])
