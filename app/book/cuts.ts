@@ -10,7 +10,8 @@ export interface Overview {
   layout: BookView['layout']
   car: BookView['car']
   corners: OverviewCorner[]
-  landmarks: LandmarkView[]
+  /** The kerbs of the real track, which the map of the lap shows. */
+  kerbs: LandmarkView[]
 }
 
 export interface OverviewCorner {
@@ -46,7 +47,7 @@ export function overviewOf(view: BookView, condition: ConditionId): Overview {
     circuit: view.circuit,
     layout: view.layout,
     car: view.car,
-    landmarks: view.landmarks,
+    kerbs: view.landmarks.filter(({ kind, real }) => kind === 'kerb' && real !== null),
     corners: view.corners.map((corner) => ({
       id: corner.id,
       number: corner.number,

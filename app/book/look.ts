@@ -1,5 +1,5 @@
 import type { ConditionId } from './ids'
-import type { BookView, GroundChoice } from './view'
+import type { BookView, ConditionView, GroundChoice } from './view'
 
 /** The choices of which places are looked at. */
 export const GROUND_CHOICES: readonly GroundChoice[] = ['sim', 'real', 'both']
@@ -16,4 +16,10 @@ export function lookAt(
   const condition = known ?? conditions.find((one) => one.kind === 'dry') ?? conditions[0]
   if (!condition) throw new Error('a book without conditions')
   return { show: GROUND_CHOICES.find((choice) => choice === asked.show) ?? 'both', condition: condition.id }
+}
+
+/** How an address names a condition: by its kind where no other is of that kind, else by its id. */
+export function conditionParam(conditions: readonly ConditionView[], condition: ConditionView): string {
+  const alike = conditions.filter((one) => one.kind === condition.kind)
+  return alike.length === 1 ? condition.kind : condition.id
 }

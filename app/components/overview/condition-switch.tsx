@@ -1,5 +1,6 @@
 import { Link } from 'react-router'
 import type { ConditionId } from '~/book/ids'
+import { conditionParam } from '~/book/look'
 import type { ConditionView } from '~/book/view'
 import { conditionWord } from '~/words/kinds'
 import { overviewWords } from '~/words/overview'
@@ -9,20 +10,19 @@ interface ConditionSwitchProps {
   chosen: ConditionId
 }
 
-/** Which condition the page speaks of, as links: by its kind where no other is of that kind, else by its id. */
+/** Which condition the page speaks of, as links. */
 export function ConditionSwitch({ conditions, chosen }: ConditionSwitchProps) {
   if (conditions.length < 2) return null
-  const alike = (kind: ConditionView['kind']) => conditions.filter((one) => one.kind === kind).length
   return (
     <nav className="seg" aria-label={overviewWords.conditions}>
-      {conditions.map(({ id, kind, name }) => (
+      {conditions.map((condition) => (
         <Link
-          key={id}
-          to={`?${new URLSearchParams({ condition: alike(kind) === 1 ? kind : id })}`}
-          aria-current={id === chosen ? 'true' : undefined}
+          key={condition.id}
+          to={`?${new URLSearchParams({ condition: conditionParam(conditions, condition) })}`}
+          aria-current={condition.id === chosen ? 'true' : undefined}
           preventScrollReset
         >
-          {kind === 'other' ? name : conditionWord(kind)}
+          {condition.kind === 'other' ? condition.name : conditionWord(condition.kind)}
         </Link>
       ))}
     </nav>

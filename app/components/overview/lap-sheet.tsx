@@ -100,7 +100,7 @@ interface MapDrawingProps {
 }
 
 function MapDrawing({ overview, road, ground, corners, width }: MapDrawingProps) {
-  const { circuit, layout, landmarks } = overview
+  const { circuit, layout, kerbs } = overview
   const turns = turningNumber(road.frame.centreline) * (layout.reversed ? -1 : 1)
   const line = circuitLine(layout.length, corners.length, lapDirection(turns))
   const list = useMemo(() => {
@@ -111,8 +111,8 @@ function MapDrawing({ overview, road, ground, corners, width }: MapDrawingProps)
       contours: step === null ? null : contourNote(step),
       metres: (value: number) => formatMetres(metres(value)),
     }
-    return lapMap({ road, ground, landmarks, corners, width, height: mapHeight(width), words }).list
-  }, [road, ground, landmarks, corners, width, circuit.name, line])
+    return lapMap({ road, ground, landmarks: kerbs, corners, width, height: mapHeight(width), words }).list
+  }, [road, ground, kerbs, corners, width, circuit.name, line])
   return <Drawing list={list} label={mapLabel(circuit.name)} description={mapDescription(line)} link={Link} />
 }
 

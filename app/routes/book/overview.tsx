@@ -1,5 +1,5 @@
 import { overviewOf } from '~/book/cuts'
-import { lookAt } from '~/book/look'
+import { conditionParam, lookAt } from '~/book/look'
 import { may } from '~/book/may'
 import { missingOf } from '~/book/missing'
 import { changeLines } from '~/components/overview/change-lines'
@@ -37,13 +37,14 @@ export async function loader({ request, url, context }: Route.LoaderArgs): Promi
     layOutGeometry(context, actor, view.layout),
   ])
   const logs = [ofBook, ofLayout].map((changes) => ({ changes, goesOn: changes.length === LOOKED_THROUGH }))
-  const dry = view.conditions.find((one) => one.kind === 'dry')?.id
+  const chosen = view.conditions.find((one) => one.id === condition)
+  const search = chosen && chosen.kind !== 'dry' ? `?condition=${conditionParam(view.conditions, chosen)}` : ''
   return {
     team: team.slug,
     overview: overviewOf(view, condition),
     conditions: view.conditions,
     condition,
-    search: condition === dry ? '' : `?${new URLSearchParams({ condition })}`,
+    search,
     missing: missingOf(view, condition),
     changes: changeLines(logs, view, names, TOLD),
     may: { addMarks: may(actor, 'mark.add', { archived: view.book.archived }).ok },
