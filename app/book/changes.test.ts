@@ -58,6 +58,14 @@ describe('what a change did', () => {
     ])
   })
 
+  it('what takes a change back says so; what takes an addition back drops it', () => {
+    const undoes = 'before' as OperationId
+    expect(tell([ofMark({ gear: { from: 4, to: 3 } }, { undoes })])).toMatchObject([{ what: { deed: 'undone' } }])
+    expect(tell([ofMark({ state: { from: 'live', to: 'dropped' } }, { undoes })])).toMatchObject([
+      { what: { deed: 'dropped' } },
+    ])
+  })
+
   it('a dropped mark is named by the line that made it', () => {
     const made = { state: { from: null, to: 'live' }, kind: { from: null, to: 'apex' } }
     const told = tell(

@@ -121,8 +121,8 @@ function deedOf(
   { target, set, undoes }: Pick<LoggedChange, 'target' | 'set' | 'undoes'>,
   frame: LapFrame,
 ): Deed | null {
-  if (undoes) return { deed: 'undone' }
   if (set.state) return stateDeed(target.kind, set.state)
+  if (undoes) return { deed: 'undone' }
   for (const ground of GROUNDS) {
     const change = set[ground]
     if (change) return placeDeed(ground, change, frame)

@@ -22,17 +22,15 @@ const say = (what: ToldChange['what'], more: Partial<ToldChange> = {}) =>
 describe('a change in words', () => {
   test('a move says how far and which way, and why where a reason was given', () => {
     const sooner = { deed: 'moved', ground: 'real', ahead: metres(-9), left: metres(0.4) } as const
-    expect(say(sooner)).toBe('build to moved 9 m sooner on the real track')
-    expect(say(sooner, { reason: 'the panel moved' })).toBe(
-      'build to moved 9 m sooner on the real track: the panel moved',
-    )
+    expect(say(sooner)).toBe('build to moved 9 m sooner')
+    expect(say(sooner, { reason: 'the panel moved' })).toBe('build to moved 9 m sooner: the panel moved')
     expect(say({ deed: 'moved', ground: 'sim', ahead: metres(0.2), left: metres(-1.4) })).toBe(
       'build to moved 1 m right in the simulator',
     )
   })
   test('a move of less than a metre keeps its tenths', () => {
     expect(say({ deed: 'moved', ground: 'real', ahead: metres(0.3), left: metres(0) })).toBe(
-      'build to moved 0.3 m later on the real track',
+      'build to moved 0.3 m later',
     )
   })
   test('short values are said, long ones named', () => {

@@ -5,7 +5,7 @@ import { type Metres, metresPerSecond } from '~/track/units'
 import { mannerWord, markKind } from './kinds'
 import { count, formatGear, formatMetres, formatNumber, formatSpeed } from './measures'
 
-/** A change in words, without its corner and without who made it: "build to moved 9 m sooner on the real track". */
+/** A change in words, without its corner and without who made it: "build to moved 9 m sooner". Only the simulator is named. */
 export function changeWords(told: ToldChange): string {
   const { thing, what, reason, count: number, alike } = told
   const why = reason ? `: ${reason}` : ''
@@ -61,7 +61,7 @@ function deedWords(what: Deed): string {
     case 'tied':
       return `tied again ${WHERE[what.ground]}`
     case 'moved':
-      return `moved ${movedBy(what.ahead, what.left)} ${WHERE[what.ground]}`
+      return `moved ${movedBy(what.ahead, what.left)}${what.ground === 'sim' ? ` ${WHERE.sim}` : ''}`
     case 'set':
       return setWords(what.set)
   }
