@@ -121,21 +121,28 @@ function takeLock() {
   return false
 }
 
-/** Does what only one command of this checkout may do at a time: install, build, start or stop the cluster. */
+let holding = false
+
+function releaseLock() {
+  if (holding) rmSync(lock, { force: true })
+  holding = false
+}
+
+/**
+ * Does what only one command of this checkout may do at a time: install, build, start or stop the cluster. What this command
+ * does meanwhile, its ending included, has the same right.
+ */
 export async function alone(work) {
+  if (holding) return work()
   for (let tries = 0; !takeLock(); tries += 1) {
     if (tries === 10) console.log('Waiting for another command of this checkout to finish its preparation.')
     await wait(100)
   }
-  let held = true
-  const release = () => {
-    if (held) rmSync(lock, { force: true })
-    held = false
-  }
-  atEnd(release)
+  holding = true
+  atEnd(releaseLock)
   try {
     return await work()
   } finally {
-    release()
+    releaseLock()
   }
 }
