@@ -14,7 +14,7 @@ export type Applied =
 /** The answer to an ask: what the page says of it, and the HTTP status. */
 export interface LayoutAnswer {
   status: number
-  sent: LayoutActionData
+  sent: Omit<LayoutActionData, 'id'>
 }
 
 type Change = Extract<LayoutAsk, { kind: 'change' }>

@@ -67,6 +67,8 @@ export interface Choice {
 }
 
 export interface LayoutActionData {
+  /** Another one for each form sent: what is to be sent again begins anew with it. */
+  id: string
   form: 'corners' | 'way' | 'undo'
   outcome: LayoutOutcome | null
   /** What was typed and what does not fit, where the form is to be sent again. */

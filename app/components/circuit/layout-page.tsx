@@ -21,6 +21,8 @@ import { WayForm } from './way-form'
 export function LayoutPage({ page, sent }: { page: LayoutPageData; sent: LayoutActionData | null }) {
   const { circuit, layout, corners, may } = page
   const at = { team: page.team, circuit: circuit.slug }
+  /** A form that is sent again begins with what the answer gives back; after a change of anyone's it begins anew. */
+  const keyOf = (form: LayoutActionData['form']) => (sent?.form === form ? `${layout.rev} ${sent.id}` : layout.rev)
   const lastOf = (form: LayoutActionData['form']) => (sent?.form === form ? sent.lastResult : null)
   return (
     <PageBody>
@@ -42,11 +44,16 @@ export function LayoutPage({ page, sent }: { page: LayoutPageData; sent: LayoutA
       <Suspense fallback={<div className="min-h-96" />}>
         <Road page={page}>
           <Part title={words.corners}>
-            <CornerTable key={layout.rev} corners={corners} lastResult={lastOf('corners')} mayChange={may.change} />
+            <CornerTable
+              key={keyOf('corners')}
+              corners={corners}
+              lastResult={lastOf('corners')}
+              mayChange={may.change}
+            />
           </Part>
           {may.change && (
             <Part title={words.start}>
-              <WayForm key={layout.rev} layout={layout} corners={corners} lastResult={lastOf('way')} />
+              <WayForm key={keyOf('way')} layout={layout} corners={corners} lastResult={lastOf('way')} />
             </Part>
           )}
           {page.changes.length > 0 && (

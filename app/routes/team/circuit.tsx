@@ -1,4 +1,4 @@
-import { data } from 'react-router'
+import { data, type ShouldRevalidateFunctionArgs } from 'react-router'
 import { v7 } from 'uuid'
 import type { OperationId } from '~/book/ids'
 import { may } from '~/book/may'
@@ -7,6 +7,7 @@ import { type LayoutAsk, layoutAsk } from '~/components/circuit/layout-ask'
 import type { LayoutPageData } from '~/components/circuit/layout-data'
 import { LayoutPage } from '~/components/circuit/layout-page'
 import { drivenCorners, layoutChanges } from '~/components/circuit/layout-view'
+import { isSent } from '~/components/frame/revalidation'
 import { applyBatch } from '~/db/apply.server'
 import { readBooks } from '~/db/read-books.server'
 import { readChanges } from '~/db/read-changes.server'
@@ -67,7 +68,7 @@ export async function action(args: Route.ActionArgs) {
   const clock = { madeAt: new Date().toISOString(), newId: () => v7() as OperationId }
   const ask = layoutAsk(await readForm(args.request), { ...shown, corners: shown.driven }, clock)
   const { status, sent } = await answerOf(ask, args, shown)
-  return data(sent, { status })
+  return data({ ...sent, id: v7() }, { status })
 }
 
 async function answerOf(
@@ -88,6 +89,9 @@ async function answerOf(
   if (!undone) throw refusal('form')
   return undoAnswer(undone.kind === 'stopped' ? undone.outcome : undone)
 }
+
+/** Also where the form was not taken: what another made of the layout meanwhile stands beside what was typed. */
+export const shouldRevalidate = (args: ShouldRevalidateFunctionArgs) => isSent(args) || args.defaultShouldRevalidate
 
 export default function Circuit({ loaderData, actionData }: Route.ComponentProps) {
   return <LayoutPage page={loaderData} sent={actionData ?? null} />
