@@ -1,5 +1,6 @@
 import { spawn } from 'node:child_process'
 import { openSync } from 'node:fs'
+import { refuseWhenEnding } from './command.mjs'
 import { atEnd } from './lifetime.mjs'
 import { logFile, root } from './places.mjs'
 import { Stop } from './steps.mjs'
@@ -15,6 +16,7 @@ import { Stop } from './steps.mjs'
  *   the process itself
  */
 export function startProcess(command, env, log) {
+  refuseWhenEnding()
   const output = log ? openSync(logFile(log), 'w') : 'inherit'
   const child = spawn(process.execPath, command, {
     cwd: root,

@@ -45,6 +45,7 @@ const settings = (socketFolder, throwAway) =>
 export class Cluster {
   #folder
   #throwAway
+  #starting
 
   /**
    * @param {string} folder where its data, socket and log are
@@ -127,7 +128,12 @@ export class Cluster {
   }
 
   /** Starts it, makes it first where there is none, takes over one that a killed run left behind. @returns {Promise<string>} what was done */
-  async start() {
+  start() {
+    this.#starting = this.#start()
+    return this.#starting
+  }
+
+  async #start() {
     const made = existsSync(join(this.#data, 'PG_VERSION')) ? '' : 'made and '
     if (made) await this.#initialise()
     this.version = readFileSync(join(this.#data, 'PG_VERSION'), 'utf8').trim()
@@ -135,7 +141,7 @@ export class Cluster {
     if (running) {
       this.port = running.port
       if (await this.#answers()) return `found running on port ${this.port}`
-      await this.stop('immediate')
+      await this.#halt('immediate')
     }
     this.port = await this.#choosePort()
     const log = join(this.#folder, 'log')
@@ -151,7 +157,7 @@ export class Cluster {
       `-p ${this.port}`,
       'start',
     ]
-    const result = await capture(unprivileged([this.#program('pg_ctl'), ...start]), { cwd: '/' })
+    const result = await capture(unprivileged([this.#program('pg_ctl'), ...start]), { cwd: '/', unbroken: true })
     if (result.code !== 0) this.#refused(existsSync(log) ? readFileSync(log, 'utf8').slice(from) : result.output)
     return `${made}started on port ${this.port}`
   }
@@ -164,11 +170,17 @@ export class Cluster {
     throw new Stop(`PostgreSQL does not start: ${reason}`)
   }
 
-  /** Stops it, if it runs. */
-  async stop(mode = 'fast') {
+  /** Stops it, if it runs; waits first until a start under way has come to its end. */
+  async stop() {
+    await Promise.allSettled([this.#starting])
+    await this.#halt('fast')
+  }
+
+  async #halt(mode) {
     if (!this.version || !this.#running()) return
     const stop = ['--pgdata', this.#data, '--mode', mode, '--wait', '--timeout=60', 'stop']
-    await must('PostgreSQL does not stop.', unprivileged([this.#program('pg_ctl'), ...stop]), { cwd: '/' })
+    const command = unprivileged([this.#program('pg_ctl'), ...stop])
+    await must('PostgreSQL does not stop.', command, { cwd: '/', unbroken: true })
   }
 
   #psql(database) {
@@ -188,9 +200,10 @@ export class Cluster {
 
   /** Stops it and removes all it holds. */
   async destroy() {
+    await Promise.allSettled([this.#starting])
     if (existsSync(join(this.#data, 'PG_VERSION'))) {
       this.version ||= readFileSync(join(this.#data, 'PG_VERSION'), 'utf8').trim()
-      await this.stop('immediate')
+      await this.#halt('immediate')
     }
     rmSync(this.#folder, { recursive: true, force: true })
   }

@@ -6,25 +6,35 @@ import { knownReason, Stop } from './steps.mjs'
 const kept = 200_000
 const running = new Set()
 
-/** Ends the commands under way. */
+let ending = false
+
+/** Ends the commands under way; no other begins, but those that undo. */
 export function endCommands() {
+  ending = true
   for (const child of running) child.kill('SIGTERM')
+}
+
+/** @throws {Stop} when this command is coming to its end */
+export function refuseWhenEnding() {
+  if (ending) throw new Stop('Stopped.')
 }
 
 /**
  * Runs a command to its end.
  *
  * @param {string[]} command program and arguments
- * @param {{ cwd?: string, env?: Record<string, string | undefined>, input?: string, log?: string }} [options]
- *   `log` names the log file that gets the output
+ * @param {{ cwd?: string, env?: Record<string, string | undefined>, input?: string, log?: string, unbroken?: boolean }} [options]
+ *   `log` names the log file that gets the output; `unbroken` keeps the signals that end this command from that one
  * @returns {Promise<{ code: number | null, stdout: string, output: string }>} `output` holds both streams
  */
-export function capture(command, { cwd = root, env, input, log } = {}) {
+export function capture(command, { cwd = root, env, input, log, unbroken = false } = {}) {
+  if (!unbroken) refuseWhenEnding()
   const [program, ...rest] = command
   return new Promise((resolve) => {
-    const child = spawn(program, rest, { cwd, env: { ...process.env, NO_COLOR: '1', ...env }, stdio: 'pipe' })
+    const all = { ...process.env, NO_COLOR: '1', ...env }
+    const child = spawn(program, rest, { cwd, env: all, stdio: 'pipe', detached: unbroken })
     const file = log ? createWriteStream(logFile(log)) : undefined
-    running.add(child)
+    if (!unbroken) running.add(child)
     let stdout = ''
     let output = ''
     const take = (text) => {
