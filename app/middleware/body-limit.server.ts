@@ -49,8 +49,9 @@ function countBody(request: Request, response: Response, limit: number) {
     drain(request)
     if (request.listenerCount('error') > 0) request.emit('error', new BodyTooLarge())
   }
-  request.on('data', count)
+  // Paused first: a listener alone would let the body run off before its reader is there.
   request.pause()
+  request.on('data', count)
   // A body that its reader left half read would block the connection for the next request.
   response.once('finish', () => {
     if (request.readableEnded) return

@@ -143,6 +143,13 @@ describe('a body', () => {
     },
   )
 
+  it.each([
+    ['with its length', { body: '' }],
+    ['without its length', { pieces: [] }],
+  ])('that is empty is answered, told %s', async (_told, nothing) => {
+    expect((await send('/sign-in', { method: 'POST', headers: fromHere, ...nothing })).status).toBe(400)
+  })
+
   it('that nobody reads does not hold up the next request on its connection', async () => {
     const agent = new Agent({ keepAlive: true, maxSockets: 1 })
     const large = { method: 'POST', headers: fromHere, body: Buffer.alloc(900_000, 'a'), agent }
