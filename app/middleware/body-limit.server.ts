@@ -60,18 +60,12 @@ function countBody(request: Request, response: Response, limit: number) {
   })
 }
 
-/** A request that carries no body. To listen for its bytes would end it before its reader comes, who would then wait for ever. */
-function isEmpty({ headers }: Request): boolean {
-  const length = headers['content-length']
-  return length === undefined ? headers['transfer-encoding'] === undefined : Number(length) === 0
-}
-
 /**
  * Refuses a body above the limit of its path with 413: by `Content-Length` before anything reads it, else as soon as that
  * many bytes have come. Stands before anything that reads a body.
  */
 export const limitBody: RequestHandler = (request, response, next) => {
-  if (request.method === 'GET' || request.method === 'HEAD' || isEmpty(request)) return next()
+  if (request.method === 'GET' || request.method === 'HEAD') return next()
   const limit = limitFor(request.path)
   if (Number(request.headers['content-length'] ?? 0) > limit) {
     request.once('end', () => refuse(response, limit))
