@@ -110,6 +110,32 @@ describe('a session', () => {
   })
 })
 
+describe('the teams of a person', () => {
+  const inGreyholm = (role: 'driver' | 'coach', ended: 'null' | 'now()') =>
+    rows.query(
+      `insert into memberships (team_id, person_id, role)
+        select teams.id, people.id, $1 from teams, people where teams.slug = 'greyholm' and people.email = $2
+        on conflict (team_id, person_id) do update set role = excluded.role, ended_at = ${ended}`,
+      [role, PEOPLE.manager],
+    )
+
+  test('one team is gone to at once; of two he chooses, with another role in each', async () => {
+    await connected
+    const manager = await signIn('manager')
+    expect((await manager.get('/teams')).headers.location).toBe('/teams/lanternside')
+    await inGreyholm('coach', 'null')
+    const both = await manager.get('/teams')
+    const theirs = await manager.get('/teams/greyholm/circuits/import')
+    await inGreyholm('driver', 'null')
+    const asDriver = await manager.get('/teams/greyholm/circuits/import')
+    await inGreyholm('driver', 'now()')
+    expect(wordsOf(both)).toMatch(/Greyholm Racing you are coach.*Lanternside Racing you are manager/)
+    expect(theirs.status).toBe(200)
+    expect(asDriver.status).toBe(403)
+    expect((await manager.get('/teams/greyholm')).status).toBe(404)
+  })
+})
+
 describe('signing out', () => {
   test('a link signs nobody out', async () => {
     const driver = await signIn('driver')
